@@ -1,0 +1,50 @@
+import { z } from 'zod'
+
+const configSchema = z.object({
+  databaseUrl: z.string().min(1),
+  ownerDatabaseUrl: z.string(),
+  workerDatabaseUrl: z.string().min(1),
+  migrationsDir: z.string(),
+  authSecret: z.string().min(32, 'at least 32 random characters'),
+  origin: z.url(),
+  demo: z.union([z.literal('on'), z.literal(''), z.literal('off')]).transform(value => value === 'on'),
+  trustedProxies: z.coerce.number().int().min(0).max(10),
+  ehr: z.object({
+    baseUrl: z.url(),
+    auth: z.enum(['none', 'backend-services']),
+    clientId: z.string(),
+    privateJwk: z.string(),
+    tokenUrl: z.string(),
+    scope: z.string(),
+    recordNumberSystem: z.string(),
+  }),
+  smtp: z.object({
+    host: z.string().min(1),
+    port: z.coerce.number().int().min(1).max(65_535),
+    user: z.string(),
+    password: z.string(),
+    tls: z.enum(['required', 'off']),
+    from: z.string().min(3),
+  }),
+  logLevel: z.enum(['trace', 'debug', 'info', 'warn', 'error', 'silent']),
+})
+
+export type ServerConfig = z.output<typeof configSchema>
+
+/**
+ * Reads the runtime configuration once and names every setting that is missing or wrong; the values themselves, which may
+ * be secrets, are never repeated.
+ *
+ * @throws Error with the list of settings.
+ */
+export function readConfig(raw: unknown): ServerConfig {
+  const parsed = configSchema.safeParse(raw)
+  if (parsed.success) return parsed.data
+  const names = parsed.error.issues.map(issue => `${settingName(issue.path)}: ${issue.code === 'custom' ? issue.message : issue.code.replaceAll('_', ' ')}`)
+  throw new Error(`Wherefore cannot start. Settings to put right: ${names.join('; ')}`)
+}
+
+/** `ehr.baseUrl` is set by `NUXT_EHR_BASE_URL`. */
+function settingName(path: readonly PropertyKey[]): string {
+  return ['NUXT', ...path.map(part => String(part).replace(/([A-Z])/g, '_$1').toUpperCase())].join('_')
+}
