@@ -1,0 +1,85 @@
+import type { Judgement } from './judge'
+import type { Assessment, Clause } from './types'
+import type { Source } from '../source'
+import { isIntravenous, outcomeWords } from '../contrast/outcome'
+import { safetySources } from '../safety/sources'
+import { plainNeed } from './plain-needs'
+import { windowAdjective } from './words'
+
+/** Why the suggestion was turned, to stand after "because" in the sentence, by finding. */
+const turnedInShort: Record<string, string> = {
+  'pregnancy-yes': 'pregnancy holds contrast back',
+  'reaction-allergic-severe': 'an earlier reaction to a gadolinium agent was severe',
+  'condition-nsf': 'nephrogenic systemic fibrosis is known',
+}
+
+/** The headline: exam, contrast and reason, or what is still needed. No full stop. */
+export function sentenceOf({ question, guidance, suggestion, turnedBy }: Judgement): string {
+  if (question === null) return 'Choose the clinical question: it decides whether contrast helps'
+  if (guidance === null || guidance.status === 'needs-answers' || suggestion === null) {
+    const open = guidance?.status === 'needs-answers' ? guidance.deciders.length : 1
+    return `${question.exam}, with or without contrast: ${open === 1 ? 'one answer decides' : `${open} answers decide`}`
+  }
+  const reason = turnedBy === null ? guidance.inShort : turnedInShort[turnedBy.id] ?? 'a safety finding holds contrast back'
+  return `${question.exam} ${outcomeWords[suggestion].phrase}, because ${reason}`
+}
+
+/** The guidance's reason, each safety finding that turned, barred or holds, then one line on the kidneys. */
+export function becauseClauses(judged: Judgement): Clause[] {
+  const { question, guidance, findings, wanted, suggestion } = judged
+  const clauses: Clause[] = []
+  if (question !== null && guidance?.status === 'answered') {
+    const note = guidance.despiteUnknown ? ' What is not known would not change this.' : ''
+    clauses.push({ text: guidance.because + note, source: mainSource(question.sources) })
+  }
+  for (const found of findings) {
+    if (found.severity !== 'info' && found.topic !== 'kidney' && found.topic !== 'dialysis') clauses.push({ text: found.text, source: found.source })
+  }
+  if (wanted !== null && wanted !== 'none' && suggestion !== 'none') clauses.push(...kidneyClauses(judged))
+  return clauses
+}
+
+function mainSource(sources: readonly Source[]): Source | null {
+  return sources.find(source => source.status === 'confirmed') ?? sources[0] ?? null
+}
+
+function kidneyClauses({ findings, kidney, wanted }: Judgement): Clause[] {
+  const found = findings.filter(item => (item.topic === 'kidney' || item.topic === 'dialysis') && item.severity !== 'info')
+  if (found.length > 0) return found.map(item => ({ text: item.text, source: item.source }))
+  const informing = findings.find(item => item.id === 'kidney-joint-not-needed' || item.id === 'kidney-30-to-59')
+  if (informing) return [{ text: informing.text, source: informing.source }]
+  if (wanted === 'intra-articular') return []
+  if (kidney.gateEgfr !== null) {
+    return [{ text: 'Kidney function: no reason found in the data available to hold back a group II agent.', source: safetySources.acrNkf }]
+  }
+  return [{ text: `Kidney function is not known and not required here: ${lowerFirst(kidney.windowReason)}`, source: safetySources.acrManual }]
+}
+
+function lowerFirst(text: string): string {
+  return /^[A-Z][a-z]/.test(text) ? text.charAt(0).toLowerCase() + text.slice(1) : text
+}
+
+/** What must be in place, with its owner; then what is not needed, so that nobody orders it. */
+export function providedClauses(judged: Judgement): Clause[] {
+  const needed = judged.needs.map((need): Clause => ({ text: need.text, source: need.source, owner: need.owner }))
+  return [...needed, ...notNeeded(judged)]
+}
+
+function notNeeded({ suggestion, kidney, needs }: Judgement): Clause[] {
+  if (suggestion === 'none') return [{ text: 'No IV start and no lab work: nothing is injected', source: null }]
+  if (suggestion === 'intra-articular') return [{ text: 'No lab work: kidney function does not decide an injection into a joint', source: safetySources.joints }]
+  if (suggestion === null || !isIntravenous(suggestion) || needs.some(need => need.kind === 'creatinine')) return []
+  if (kidney.status === 'dialysis') return [{ text: 'No new lab work: on dialysis the creatinine decides nothing', source: safetySources.acrNkf }]
+  if (kidney.currency === 'current' && kidney.windowDays !== null) {
+    return [{ text: `No new lab work: the creatinine is inside the ${windowAdjective(kidney.windowDays)} window`, source: null }]
+  }
+  if (kidney.currency === 'not-needed') return [{ text: 'No lab work: policy asks for no creatinine without a risk factor', source: null }]
+  return []
+}
+
+/** The same for the patient: why, and what to do before. */
+export function plainVersion({ guidance, turnedBy, needs, findings, suggestion }: Judgement): Assessment['plain'] {
+  const why = turnedBy !== null ? turnedBy.plain : guidance?.status === 'answered' ? guidance.plain : ''
+  const before = needs.flatMap(need => plainNeed(need.kind, { findings, suggestion }) ?? [])
+  return { why, before: [...new Set(before)] }
+}

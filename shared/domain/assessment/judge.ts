@@ -1,0 +1,97 @@
+import type { Assessment, AssessmentInputs, AssessmentRules } from './types'
+import type { ContrastOutcome, DecidableOutcome } from '../contrast/outcome'
+import type { AgentChoice, AgentId } from '../contrast/types'
+import type { ClinicalQuestion, GuidanceResult } from '../guidance/types'
+import type { KidneyFunction } from '../kidney/types'
+import type { SafetyContext } from '../safety/context'
+import type { SafetyFinding } from '../safety/types'
+import { usesContrast } from '../contrast/outcome'
+import { rankAgents } from '../contrast/rank'
+import { decide } from '../guidance/decide'
+import { evaluateKidney } from '../kidney/evaluate'
+import { ageBounds } from '../safety/age'
+import { findSafety } from '../safety/index'
+import { deriveNeeds } from './derive-needs'
+
+/** What a radiologist signed, where needs and findings are wanted for that instead of for the suggestion. */
+export interface Decided { contrast: DecidableOutcome, agent: AgentId | null }
+
+/** The facts of an assessment before they are put into words. */
+export interface Judgement {
+  question: ClinicalQuestion | null
+  guidance: GuidanceResult | null
+  /** What the clinical question asks for, before safety. */
+  wanted: ContrastOutcome | null
+  suggestion: ContrastOutcome | null
+  /** The finding that turned the suggestion, if one did. */
+  turnedBy: SafetyFinding | null
+  kidney: KidneyFunction
+  findings: SafetyFinding[]
+  agents: AgentChoice | null
+  needs: Assessment['needs']
+  asksRadiologist: boolean
+}
+
+/** The kidney function of these inputs: apart, so that counterfactuals can put another in its place. */
+export function kidneyOf(inputs: AssessmentInputs, rules: AssessmentRules): KidneyFunction {
+  return evaluateKidney({
+    now: inputs.now,
+    plannedAt: inputs.plannedAt,
+    patient: inputs.patient,
+    readings: inputs.readings,
+    recordState: inputs.record.state,
+    screening: inputs.screening,
+    setting: inputs.setting,
+    policy: rules.policy,
+  })
+}
+
+/** Guidance, kidney, safety, agents and needs for these inputs; for `decided` instead of the suggestion where given. */
+export function judge(inputs: AssessmentInputs, rules: AssessmentRules, options: { decided?: Decided, kidney?: KidneyFunction } = {}): Judgement {
+  const { policy } = rules
+  const question = rules.guidance.questions.find(candidate => candidate.id === inputs.questionId) ?? null
+  const guidance = question === null ? null : decide(question, inputs.answers)
+  const asked = guidance?.status === 'answered' ? guidance.contrast : null
+  const wanted = options.decided?.contrast ?? asked
+  const kidney = options.kidney ?? kidneyOf(inputs, rules)
+  const at = inputs.plannedAt ?? inputs.now
+  const context: SafetyContext = {
+    outcome: wanted,
+    now: inputs.now,
+    at,
+    planned: inputs.plannedAt !== null,
+    priority: inputs.priority,
+    setting: inputs.setting,
+    patient: inputs.patient,
+    age: ageBounds(inputs.patient.birthDate, at, policy.department.timeZone),
+    screening: inputs.screening,
+    exposures: inputs.exposures,
+    recordState: inputs.record.state,
+    kidney,
+    policy,
+    agents: rules.agents,
+  }
+  const findings = findSafety(context)
+  const turnedBy = options.decided ? null : turningFinding(wanted, findings)
+  const suggestion = turnedBy?.turns ?? wanted
+  const ranked = suggestion === 'discuss' ? wanted : suggestion
+  const agents = ranked !== null && usesContrast(ranked)
+    ? rankAgents({ outcome: ranked, patient: inputs.patient, at, kidney, findings, exposures: inputs.exposures, policy, agents: rules.agents })
+    : null
+  return {
+    question, guidance, wanted, suggestion, turnedBy, kidney, findings, agents,
+    needs: deriveNeeds({
+      inputs, policy, kidney, findings, outcome: suggestion, examName: question?.exam ?? null,
+      agent: options.decided ? options.decided.agent : agents?.best ?? null,
+      decided: options.decided !== undefined,
+    }),
+    asksRadiologist: suggestion === 'discuss' || findings.some(found => found.asksRadiologist),
+  }
+}
+
+/** "Without contrast" outweighs "to be discussed"; nothing turns a scan that uses none. */
+function turningFinding(wanted: ContrastOutcome | null, findings: SafetyFinding[]): SafetyFinding | null {
+  if (wanted === null || wanted === 'none') return null
+  const turning = findings.filter(found => found.turns !== null && found.turns !== wanted)
+  return turning.find(found => found.turns === 'none') ?? turning[0] ?? null
+}

@@ -1,0 +1,84 @@
+import { DateTime } from 'luxon'
+import type { SafetyContext } from './context'
+import type { GadoliniumExposure, SafetyFinding } from './types'
+import { mayBeIntravenous, mayUseContrast } from './context'
+import { finding } from './finding'
+import { safetySources } from './sources'
+
+/** Earlier gadolinium: the interval since the last dose, and the doses so far as context without a limit. */
+export function findExposure(context: SafetyContext): SafetyFinding[] {
+  if (!mayUseContrast(context)) return []
+  return [...findInterval(context), ...findEarlierDoses(context)]
+}
+
+/** The latest moment a dose can have been given: a date alone may mean its last minute, so the interval is never overstated. */
+function latestInstant(exposure: GadoliniumExposure, zone: string): DateTime | null {
+  const start = DateTime.fromISO(exposure.givenAt, { zone })
+  if (!start.isValid) return null
+  return exposure.givenAt.includes('T') ? start : start.endOf('day')
+}
+
+function findInterval(context: SafetyContext): SafetyFinding[] {
+  const { policy, kidney } = context
+  if (!mayBeIntravenous(context)) return []
+  const zone = policy.department.timeZone
+  const at = DateTime.fromISO(context.at)
+  const last = context.exposures
+    // A month or year alone says nothing about hours.
+    .filter(exposure => /^\d{4}-\d{2}-\d{2}/.test(exposure.givenAt))
+    .map(exposure => latestInstant(exposure, zone))
+    .filter(instant => instant !== null && instant.startOf('day') <= at)
+    .reduce<DateTime | null>((newest, instant) => newest === null || (instant !== null && instant > newest) ? instant : newest, null)
+  if (last === null) return []
+  const hours = Math.max(0, at.diff(last, 'hours').hours)
+  const low = kidney.status === 'dialysis' || (kidney.gateEgfr !== null && kidney.gateEgfr < 30)
+  const middle = kidney.gateEgfr === null || kidney.gateEgfr <= 60
+  const rule = low ? policy.repeatIntervalHours.value.below30 : middle ? policy.repeatIntervalHours.value.from30To60 : policy.repeatIntervalHours.value.above60
+  if (hours >= rule.optimal) return []
+  const band = low ? 'an eGFR below 30 or dialysis' : middle ? (kidney.gateEgfr === null ? 'an eGFR that is not known' : 'an eGFR of 30 to 60') : 'an eGFR above 60'
+  const ago = `The last gadolinium dose lies ${Math.floor(hours)} hours before ${context.planned ? 'the planned exam' : 'now'}`
+  const source = policy.repeatIntervalHours.source
+  if (hours < rule.least) {
+    return [finding({
+      id: 'exposure-interval-under-least', topic: 'exposure', severity: 'hold',
+      text: `${ago}. With ${band}, ${rule.optimal} hours are advised and ${rule.least} the least when urgent: a radiologist's word and a reason are needed.`,
+      plain: 'You had contrast very lately. A doctor decides if more can be given now.',
+      addsNeeds: ['radiologist-word'], asksRadiologist: true, source,
+    })]
+  }
+  return [finding({
+    id: 'exposure-interval-under-optimal', topic: 'exposure', severity: 'caution',
+    text: `${ago}. With ${band}, ${rule.optimal} hours are advised, ${rule.least} the least when urgent.`,
+    plain: 'You had contrast lately. We may wait a little before we give more.',
+    source,
+  })]
+}
+
+function findEarlierDoses(context: SafetyContext): SafetyFinding[] {
+  const { exposures, agents } = context
+  if (exposures.length === 0) return []
+  const known = exposures.filter(exposure => exposure.amountMmol !== null)
+  const total = known.reduce((sum, exposure) => sum + (exposure.amountMmol ?? 0), 0)
+  const dates = exposures.map(exposure => exposure.givenAt.slice(0, 10)).sort()
+  const doses = exposures.length === 1 ? '1 earlier gadolinium dose' : `${exposures.length} earlier gadolinium doses`
+  const amount = known.length === 0 ? 'amounts not recorded' : known.length === exposures.length
+    ? `${total.toFixed(1)} mmol in all`
+    : `${total.toFixed(1)} mmol in the ${known.length} with an amount`
+  const span = dates[0] === dates.at(-1) ? `on ${dates[0]}` : `from ${dates[0]} to ${dates.at(-1)}`
+  const linear = exposures.filter(exposure => agents.find(agent => agent.id === exposure.agent)?.structure === 'linear')
+  const findings = [finding({
+    id: 'exposure-earlier-doses', topic: 'exposure', severity: 'info',
+    text: `${doses} ${span}, ${amount}. No limit is published; a needed scan is not to be avoided on account of it.`,
+    plain: 'You had contrast before. That is no reason to leave it out when it is needed.',
+    source: safetySources.fdaRetention,
+  })]
+  if (linear.length > 0) {
+    findings.push(finding({
+      id: 'exposure-earlier-linear', topic: 'exposure', severity: 'info',
+      text: `${linear.length === 1 ? 'One of them was' : `${linear.length} of them were`} with a linear agent, which leaves more gadolinium behind: a macrocyclic agent is the better choice.`,
+      plain: 'We choose the type of contrast that leaves the least behind.',
+      source: safetySources.fdaRetention,
+    }))
+  }
+  return findings
+}

@@ -1,0 +1,135 @@
+import type { SafetyContext } from './context'
+import type { SafetyFinding } from './types'
+import { cannotWait, groupOneAgents, mayBeIntravenous } from './context'
+import { finding } from './finding'
+import { safetySources } from './sources'
+
+/** Below this eGFR, mL/min/1.73 m², ACR group I agents are contraindicated whatever the department's own hold. */
+const groupOneLimit = 30
+
+/**
+ * Kidney function for an agent given by vein: the department's hold, injury, and what to do while it is not known.
+ * A joint needs none of it: the gadolinium there is a hundredth of a dose by vein.
+ */
+export function findKidney(context: SafetyContext): SafetyFinding[] {
+  if (context.outcome === 'intra-articular') {
+    return [finding({
+      id: 'kidney-joint-not-needed', topic: 'kidney', severity: 'info',
+      text: 'Kidney function does not decide an injection into a joint: the amount of gadolinium is about a hundredth of a dose by vein.',
+      plain: 'The amount in the joint is tiny. You do not need a kidney test for it.',
+      source: safetySources.joints,
+    })]
+  }
+  if (!mayBeIntravenous(context) || context.kidney.status === 'dialysis') return []
+  return [...findInjury(context), ...findLevel(context), ...findMissing(context)]
+}
+
+function unsteady({ kidney }: SafetyContext): boolean {
+  return kidney.injury.status === 'aki' || kidney.injury.status === 'aki-presumed'
+    || kidney.injury.status === 'recent-aki' || kidney.injury.steady === false
+}
+
+function findInjury(context: SafetyContext): SafetyFinding[] {
+  if (unsteady(context)) {
+    return [finding({
+      id: 'kidney-unsteady', topic: 'kidney', severity: 'hold',
+      text: 'Creatinine is not steady or shows acute injury, so eGFR misleads: treated like an eGFR below 30 until a radiologist says otherwise.',
+      plain: 'Your kidney tests have changed lately. A doctor decides about contrast first.',
+      addsNeeds: ['radiologist-word'], barsAgents: groupOneAgents(context), asksRadiologist: true,
+      source: safetySources.kdigoInjury,
+    })]
+  }
+  const ill = context.screening.acuteIllness === 'yes' || context.screening.acuteIllness === 'unknown'
+  if (ill && context.kidney.injury.status === 'insufficient') {
+    return [finding({
+      id: 'kidney-injury-not-judged', topic: 'kidney', severity: 'caution',
+      text: 'Acute illness is stated or not known, and the results do not suffice to judge acute kidney injury: a person judges it before contrast.',
+      plain: 'You have been unwell. A doctor checks your kidney tests before contrast.',
+      addsNeeds: ['radiologist-word'], asksRadiologist: true,
+      source: safetySources.kdigoInjury,
+    })]
+  }
+  return []
+}
+
+function findLevel(context: SafetyContext): SafetyFinding[] {
+  const gate = context.kidney.gateEgfr
+  if (gate === null || unsteady(context)) return []
+  const hold = context.policy.holdBelowEgfr.value
+  if (gate < hold) {
+    return [finding({
+      id: 'kidney-below-hold', topic: 'kidney', severity: 'hold',
+      text: `eGFR is below ${hold}: the department holds contrast for a radiologist's word. Group I agents are barred. `
+        + 'US labels advise against contrast here unless it is essential; the ACR and the National Kidney Foundation report no NSF in '
+        + '4,931 group II doses below 30, and that holding back may harm more.',
+      plain: 'Your kidneys work less well. A doctor decides about contrast first.',
+      addsNeeds: ['radiologist-word'], barsAgents: groupOneAgents(context), asksRadiologist: true,
+      source: safetySources.acrNkf,
+    })]
+  }
+  if (gate < groupOneLimit) {
+    return [finding({
+      id: 'kidney-group-one-barred', topic: 'kidney', severity: 'caution',
+      text: `eGFR is below ${groupOneLimit}: group I agents are barred; at most one full dose in this exam.`,
+      plain: 'Your kidneys work less well. We use a type of contrast that suits this.',
+      barsAgents: groupOneAgents(context),
+      source: safetySources.acrNkf,
+    })]
+  }
+  if (gate < 60) {
+    return [finding({
+      id: 'kidney-30-to-59', topic: 'kidney', severity: 'info',
+      text: 'eGFR between 30 and 59: no reason found to hold a group II agent at a standard dose. The creatinine has to be recent.',
+      plain: 'Your kidneys work a little less well. That is no reason to leave contrast out.',
+      source: safetySources.acrNkf,
+    })]
+  }
+  return []
+}
+
+function findMissing(context: SafetyContext): SafetyFinding[] {
+  const { kidney } = context
+  const open = kidney.currency === 'missing' || kidney.currency === 'too-old'
+  const findings: SafetyFinding[] = []
+  if (open || kidney.gateEgfr === null) {
+    findings.push(finding({
+      id: 'kidney-group-one-without-value', topic: 'kidney', severity: 'info',
+      text: 'Without a current eGFR, group I agents are barred.',
+      plain: 'We use a type of contrast that is kept for all kidney levels.',
+      barsAgents: groupOneAgents(context),
+      source: safetySources.acrManual,
+    }))
+  }
+  if (kidney.status === 'needs-height') {
+    findings.push(finding({
+      id: 'kidney-needs-height', topic: 'kidney', severity: 'caution',
+      text: 'A child\'s eGFR needs a height: none was found, so no number is shown.',
+      plain: 'We need to measure how tall your child is.',
+      addsNeeds: ['height'],
+      source: { title: 'CKiD U25 creatinine equation, Kidney Int 99:948', body: 'CKiD study', year: 2021, status: 'confirmed' },
+    }))
+  }
+  if (!open) return findings
+  const why = kidney.currency === 'too-old' ? 'The newest creatinine is too old for the planned exam' : kidney.status === 'could-not-look'
+    ? 'The hospital record could not be read, so creatinine is not known'
+    : 'No usable creatinine is at hand'
+  if (cannotWait(context)) {
+    findings.push(finding({
+      id: 'kidney-unknown-urgent', topic: 'kidney', severity: 'caution',
+      text: `${why}, and the exam may not be able to wait: a radiologist's word can stand in for the result. Draw blood on arrival all the same.`,
+      plain: 'Your scan is urgent. A doctor decides if it can start before the blood test.',
+      addsNeeds: ['creatinine', 'radiologist-word'], asksRadiologist: true,
+      source: context.policy.creatinineWindowDays.source,
+    }))
+  }
+  else {
+    findings.push(finding({
+      id: kidney.currency === 'too-old' ? 'kidney-creatinine-too-old' : 'kidney-creatinine-missing', topic: 'kidney', severity: 'caution',
+      text: `${why}: a new result is needed first. Missing is not normal.`,
+      plain: 'You need a blood test to check your kidneys before the scan.',
+      addsNeeds: ['creatinine'],
+      source: context.policy.creatinineWindowDays.source,
+    }))
+  }
+  return findings
+}
