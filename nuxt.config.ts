@@ -61,6 +61,10 @@ export default defineNuxtConfig({
       scope: '',
       /** Identifier system of the record number, for `Patient?identifier=system|value`. Empty: value alone. */
       recordNumberSystem: '',
+      /** The site's own creatinine codes, `system|code` by comma. */
+      creatinineCodes: '',
+      /** Origins other than the base URL's own that page links may name, by comma. */
+      pageOrigins: '',
     },
     smtp: {
       host: '',

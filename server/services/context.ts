@@ -21,7 +21,8 @@ export interface ServiceContext {
   actor: ContextActor
   requestId: string
   now: Date
-  ehr: EhrClient
+  /** Null where no hospital record is connected. */
+  ehr: EhrClient | null
   idempotency: IdempotencyToken | null
   /** Which row rules were asked; the route wrapper refuses to answer when one was forgotten. */
   permitted: Set<Action>

@@ -2,6 +2,7 @@ import { openDatabase } from '#server/database/client'
 import type { DatabaseHandle } from '#server/database/client'
 import { createEhrClient } from '#server/ehr/client'
 import type { EhrClient } from '#server/ehr/client'
+import { parseEhrSettings } from '#server/ehr/settings'
 import { registerPool } from '#server/services/transaction'
 import { readConfig } from './config'
 import type { ServerConfig } from './config'
@@ -10,7 +11,8 @@ import { log } from './log'
 /** What one server process holds: configuration, connections, clients. Correctness never rests on its memory. */
 export interface App extends DatabaseHandle {
   config: ServerConfig
-  ehr: EhrClient
+  /** Null where no hospital record is connected. */
+  ehr: EhrClient | null
 }
 
 let app: App | undefined
@@ -25,5 +27,6 @@ function createApp(): App {
   const config = readConfig(useRuntimeConfig())
   const handle = openDatabase(config.databaseUrl, error => log.error({ err: error.message }, 'database connection lost'))
   registerPool(handle.db, handle.pool)
-  return { ...handle, config, ehr: createEhrClient(config.ehr) }
+  const ehrSettings = parseEhrSettings(config.ehr)
+  return { ...handle, config, ehr: ehrSettings ? createEhrClient(ehrSettings) : null }
 }

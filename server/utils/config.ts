@@ -9,15 +9,8 @@ const configSchema = z.object({
   origin: z.url(),
   demo: z.union([z.literal('on'), z.literal(''), z.literal('off')]).transform(value => value === 'on'),
   trustedProxies: z.coerce.number().int().min(0).max(10),
-  ehr: z.object({
-    baseUrl: z.url(),
-    auth: z.enum(['none', 'backend-services']),
-    clientId: z.string(),
-    privateJwk: z.string(),
-    tokenUrl: z.string(),
-    scope: z.string(),
-    recordNumberSystem: z.string(),
-  }),
+  /** Read by `parseEhrSettings`, which knows its form. */
+  ehr: z.unknown(),
   smtp: z.object({
     host: z.string().min(1),
     port: z.coerce.number().int().min(1).max(65_535),

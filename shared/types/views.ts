@@ -13,6 +13,7 @@ import type { RequestForm } from '../domain/request/form'
 import type { MessageKind } from '../domain/request/messages'
 import type { RequestState, Side } from '../domain/request/lifecycle'
 import type { Priority } from '../domain/request/priority'
+import type { GadoliniumExposure } from '../domain/safety/types'
 
 /** What the server answers, as JSON: instants are ISO strings in UTC. */
 
@@ -169,6 +170,8 @@ export interface RequestView {
   record: RecordReading | null
   recordReadAt: string | null
   assessment: Assessment | null
+  /** Doses given here before, for the same patient. */
+  ledger: GadoliniumExposure[]
   /** What changed since the assessment the radiologist last saw, in words. */
   changes: string[]
   decision: DecisionView | null
@@ -188,7 +191,17 @@ export interface RequestView {
 /** What a write answers: enough to go on; the rest is read again. */
 export interface WriteResult { id: string, reference: string | null, state: RequestState, version: number }
 
-export interface AssessmentView { assessment: Assessment, record: RecordReading | null, recordReadAt: string | null }
+export interface AssessmentView {
+  assessment: Assessment
+  record: RecordReading | null
+  recordReadAt: string | null
+  /** Doses given here before, for the same patient. */
+  ledger: GadoliniumExposure[]
+  version: number
+}
+
+/** A patient search; `known-here` when the record could not be reached and only people already known to Wherefore were searched. */
+export interface PatientSearchView extends PatientSearch { source: 'record' | 'known-here' }
 
 export interface PreparationRow extends RequestRow { needs: NeedView[], phone: string | null, minutes: number, hasLetter: boolean }
 
