@@ -12,7 +12,7 @@ import { chmodSync, chownSync, existsSync, mkdirSync, readFileSync, readdirSync,
 import { basename, join, resolve } from 'node:path'
 import { setTimeout as sleep } from 'node:timers/promises'
 import { pathToFileURL } from 'node:url'
-import { parseArgs } from 'node:util'
+import util from 'node:util'
 import { findProgram, installLine, isRoot } from './lib/apt.mjs'
 import { Failure } from './lib/failure.mjs'
 import { beganAt } from './lib/identity.mjs'
@@ -298,7 +298,7 @@ export async function removeCluster({ dir }) {
 }
 
 async function main() {
-  const { values, positionals } = parseArgs({
+  const { values, positionals } = util.parseArgs({
     allowPositionals: true,
     options: { dir: { type: 'string' }, port: { type: 'string' }, database: { type: 'string', default: 'wherefore' } },
   })

@@ -2,3 +2,8 @@
 export class Failure extends Error {
   name = 'Failure'
 }
+
+/** Work that was given up because the run is ending; nobody needs to hear about it. */
+export class Stopped extends Failure {
+  name = 'Stopped'
+}

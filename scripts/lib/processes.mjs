@@ -3,7 +3,7 @@ import { closeSync, mkdirSync, openSync, readFileSync } from 'node:fs'
 import { get } from 'node:http'
 import { join } from 'node:path'
 import { setTimeout as sleep } from 'node:timers/promises'
-import { Failure } from './failure.mjs'
+import { Failure, Stopped } from './failure.mjs'
 import { beganAt } from './identity.mjs'
 
 const slug = (name) => name.toLowerCase().replace(/[^a-z0-9]+/g, '-')
@@ -12,16 +12,19 @@ const slug = (name) => name.toLowerCase().replace(/[^a-z0-9]+/g, '-')
  * Starts and ends the programs of one run. Each is the leader of a process group of its own: Ctrl-C then reaches the script
  * alone, which ends them in the right order, and ending a program ends what it started too.
  *
- * @param {{ cwd: string, logs: string }} options `logs` is the folder that receives one log for each program
+ * @param {{ cwd: string, logs: string, onChange?: (running: { name: string, pid: number, began: string | null }[]) => void }} options
+ *   `logs` is the folder that receives one log for each program; `onChange` hears what runs whenever that changes
  */
-export function createProcesses({ cwd, logs }) {
+export function createProcesses({ cwd, logs, onChange = () => {} }) {
   mkdirSync(logs, { recursive: true })
   /** @type {Set<Program>} */
   const programs = new Set()
   let closing = false
 
+  const running = () => [...programs].map(({ name, child, began }) => ({ name, pid: child.pid, began }))
+
   function open(name, command, args, { env = process.env, show = false } = {}) {
-    if (closing) throw new Failure('Stopping.')
+    if (closing) throw new Stopped('Stopped.')
     const log = join(logs, `${slug(name)}.log`)
     const file = show ? null : openSync(log, 'w', 0o600)
     const child = spawn(command, args, {
@@ -36,12 +39,14 @@ export function createProcesses({ cwd, logs }) {
       const end = (result) => {
         program.result = result
         programs.delete(program)
+        onChange(running())
         resolve(result)
       }
       child.once('error', (error) => end({ code: 127, signal: null, error }))
       child.once('exit', (code, signal) => end({ code, signal, error: null }))
     })
     programs.add(program)
+    onChange(running())
     return program
   }
 
@@ -53,7 +58,7 @@ export function createProcesses({ cwd, logs }) {
   async function run(name, command, args, options) {
     const program = open(name, command, args, options)
     const { code, error } = await program.ended
-    if (closing) throw new Failure('Stopped.')
+    if (closing) throw new Stopped('Stopped.')
     if (error) return { ok: false, code: 127, log: program.log, output: `${command}: ${error.message}` }
     return { ok: code === 0, code, log: program.log, output: program.log ? readFileSync(program.log, 'utf8') : '' }
   }
@@ -82,7 +87,7 @@ export function createProcesses({ cwd, logs }) {
       }
       await Promise.race([sleep(100), program.ended])
     }
-    if (closing) throw new Failure('Stopped.')
+    if (closing) throw new Stopped('Stopped.')
     const result = program.result
     await stop(program)
     const output = tailOf(program.log)
@@ -109,10 +114,8 @@ export function createProcesses({ cwd, logs }) {
     return clean.every(Boolean)
   }
 
-  /** What runs now, for the record that the next start reads. */
-  const running = () => [...programs].map(({ name, child, began }) => ({ name, pid: child.pid, began }))
 
-  return { run, must, serve, stop, stopAll, running }
+  return { run, must, serve, stop, stopAll }
 }
 
 /** @typedef {{ name: string, child: import('node:child_process').ChildProcess, log: string | null, began: string | null, ended: Promise<unknown>, result: unknown, wanted: boolean }} Program */

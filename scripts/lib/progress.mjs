@@ -1,3 +1,5 @@
+import { Stopped } from './failure.mjs'
+
 /**
  * Step-by-step progress on the terminal. On a terminal a running step counts its seconds in place; elsewhere (a log, a pipe) a
  * step is one line when it begins to matter and one when it ends.
@@ -45,7 +47,7 @@ export function createProgress({ out = process.stdout, now = () => performance.n
       return result
     } catch (error) {
       current = null
-      line(`  ${label} ✗ failed (${seconds(since)})`)
+      line(`  ${label} ✗ ${error instanceof Stopped ? 'stopped' : 'failed'} (${seconds(since)})`)
       throw error
     } finally {
       clearInterval(timer)
