@@ -5,6 +5,7 @@ import type { NeedKind, NeedState, Need } from '../domain/assessment/needs'
 import type { Assessment } from '../domain/assessment/types'
 import type { ContrastOutcome, DecidableOutcome } from '../domain/contrast/outcome'
 import type { AgentId } from '../domain/contrast/types'
+import type { Guidance } from '../domain/guidance/types'
 import type { Letter } from '../domain/letter/types'
 import type { LetterKind, LetterState } from '../domain/letter/kinds'
 import type { Policy } from '../domain/policy/types'
@@ -213,7 +214,7 @@ export interface ReviewView extends Page<RequestRow> { total: number }
 
 export interface ScannerView { id: string, name: string, place: string, fieldStrengthTesla: string, ivHours: string }
 
-export interface GuidanceView { version: string, signedBy: string, effectiveFrom: string }
+export interface GuidanceView { guidance: Guidance, version: string, signedBy: string, effectiveFrom: string }
 export interface PolicyView { policy: Policy, signedBy: string, effectiveFrom: string }
 
 export interface UserView {
