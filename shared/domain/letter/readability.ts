@@ -15,13 +15,13 @@ const spokenSyllables: Readonly<Record<string, number>> = {
   area: 3, areas: 3, create: 2, created: 3, creatinine: 4, diet: 2, being: 2, fluid: 2, fluids: 2, idea: 3, ideas: 3,
   people: 2, real: 1, really: 2, science: 2, someone: 2, something: 2, sometimes: 2, somewhere: 2, therefore: 2,
   wherefore: 2, whole: 1, women: 2, every: 2, everything: 3, different: 3, several: 3, dialysis: 4, uterus: 3,
-  ultrasound: 3, whenever: 3, doing: 2, going: 2, seeing: 2, quiet: 2, trial: 2, trials: 2, reaction: 3, reactions: 3,
+  ultrasound: 3, whenever: 3, doing: 2, going: 2, seeing: 2, quiet: 2, reaction: 3, reactions: 3,
   safely: 2, likely: 2, closely: 2, rarely: 2, surely: 2, purely: 2, mainly: 2, movement: 2, statement: 2, lifetime: 2,
   breastfeeding: 3, careful: 2, carefully: 3, useful: 2, diabetes: 4, react: 2, heart: 1, eye: 1, eyes: 1, biopsy: 3,
 }
 
-/** Vowels written together but spoken apart, as in "radiology", "serious", "video" and "carrying". */
-const spokenApart = /i[ao](?!n|l|us)|iu|eo(?!u)|ism$|[^aeiouy]ying$|[^aeiouy]ier$/gu
+/** Vowels written together but spoken apart, as in "radiology", "serious", "video" and "carrying"; not "special". */
+const spokenApart = /(?<![tcsgxl])i(?:a|o(?!n))|iu|eo(?!u)|ism$|[^aeiouy]ying$|[^aeiouy]ier$/gu
 
 const sentenceEnd = /[.!?]+(?=\s|$)|\n+/u
 const wordPattern = /[\p{L}\p{N}]+(?:[’'.,-][\p{L}\p{N}]+)*/gu
@@ -78,7 +78,7 @@ function partSyllables(part: string): number {
   const letters = part.replace(/[^\p{L}\p{N}]/gu, '')
   if (/^\p{N}+$/u.test(letters)) return letters.length
   if (/^\p{Lu}{2,5}s?$/u.test(letters)) return letters.replace(/s$/u, '').length
-  const word = part.toLowerCase().replace(/[’']s?(?=$)/u, '').replace(/[^\p{L}]/gu, '')
+  const word = part.toLowerCase().replace(/[’']s?$/u, '').replace(/[^\p{L}]/gu, '')
   return spokenSyllables[word] ?? spelledSyllables(word)
 }
 
