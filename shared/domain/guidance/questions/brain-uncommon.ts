@@ -1,0 +1,555 @@
+import type { ClinicalQuestion } from '../types'
+
+/** Starter questions: brain, asked less often; most common first. */
+export const brainUncommonQuestions: ClinicalQuestion[] = [
+  {
+    id: 'meningioma-follow-up',
+    region: 'brain',
+    exam: 'MRI brain',
+    question: 'Small incidental meningioma being watched: has it grown?',
+    plainQuestion: 'Is my small, harmless-looking brain growth the same size?',
+    volume: 2,
+    usualBranch: 1,
+    deciders: [
+      {
+        id: 'treatedOrPlanned',
+        kind: 'yesno',
+        ask: 'Has it been treated, is treatment planned, or is it touching a sinus, the optic pathway or the skull base?',
+      },
+    ],
+    branches: [
+      {
+        when: { treatedOrPlanned: ['yes'] },
+        contrast: 'iv-with-and-without',
+        inShort: 'what remains or invades is seen best by its enhancement',
+        because: 'Residual tumor, dural tail, sinus invasion and optic pathway contact need enhancement.',
+        plain: 'The exact edges matter for treatment. Contrast shows them.',
+      },
+      {
+        when: {},
+        contrast: 'discuss',
+        inShort: 'thin plain images may be enough to measure a small quiet meningioma',
+        because: 'For a small convexity lesion with a contrast baseline, thin T2 or 3D T1 may be enough to measure size; departments differ and the radiologist should choose.',
+        plain: 'A plain MRI scan may be enough to check the size. The radiologist will decide.',
+      },
+    ],
+    sources: [
+      {
+        title: 'Noncontrast T2-weighted MRI sequences for long-term monitoring of asymptomatic convexity meningiomas',
+        body: 'World Neurosurgery',
+        year: 2020,
+        status: 'confirmed',
+      },
+      {
+        title: 'Common practice',
+        body: 'trade practice, no single published source',
+        year: null,
+        status: 'common practice',
+      },
+    ],
+    commonError: 'Yearly contrast for decades in a stable small lesion without asking whether it is needed.',
+    alternatives: 'If contrast cannot be given: thin T2 and 3D T1 against the earlier scan.',
+    searchWords: [
+      'meningioma', 'meningeoma', 'menigioma', 'dural tumor', 'incidental meningioma', 'extra-axial mass',
+      'watchful waiting',
+    ],
+  },
+  {
+    id: 'brain-infection',
+    region: 'brain',
+    exam: 'MRI brain',
+    question: 'Suspected abscess, meningitis complication or encephalitis?',
+    plainQuestion: 'Do I have an infection in or around my brain?',
+    volume: 2,
+    usualBranch: 0,
+    deciders: [],
+    branches: [
+      {
+        when: {},
+        contrast: 'iv-with-and-without',
+        inShort: 'infection is located by the rim and membranes that enhance',
+        because: 'Rim, meningeal and cranial nerve enhancement locate the infection and its complications; diffusion adds the pus-filled cavity.',
+        plain: 'Contrast shows where the infection is and whether a pocket of pus has formed.',
+      },
+    ],
+    sources: [
+      {
+        title: 'Common practice',
+        body: 'trade practice, no single published source',
+        year: null,
+        status: 'common practice',
+      },
+      {
+        title: 'ACR Appropriateness Criteria: Headache',
+        body: 'American College of Radiology',
+        year: 2019,
+        status: 'confirmed',
+      },
+    ],
+    commonError: 'Relying on non-contrast images to exclude meningeal disease.',
+    alternatives: 'Non-contrast diffusion and FLAIR find most abscesses; contrast CT if MRI is not possible.',
+    searchWords: [
+      'abscess', 'encephalitis', 'meningitis', 'fever and confusion', 'empyema', 'cerebritis', 'HSV',
+      'herpes encephalitis', 'toxoplasmosis', 'ventriculitis', 'CNS infection', 'absess',
+    ],
+  },
+  {
+    id: 'hydrocephalus-shunt-nph',
+    region: 'brain',
+    exam: 'MRI brain, limited ventricular or CSF-flow protocol',
+    question: 'Enlarged ventricles, shunt check or suspected normal pressure hydrocephalus?',
+    plainQuestion: 'Is fluid building up in my brain?',
+    volume: 2,
+    usualBranch: 1,
+    deciders: [
+      {
+        id: 'newCause',
+        kind: 'yesno',
+        ask: 'Is this newly found with no known cause, so a tumor or membrane must be excluded?',
+      },
+    ],
+    branches: [
+      {
+        when: { newCause: ['yes'] },
+        contrast: 'iv-with-and-without',
+        inShort: 'a blocking tumor or membrane must be excluded at the first work-up',
+        because: 'An obstructing tumor or inflammatory membrane may be seen only after contrast at the first work-up.',
+        plain: 'The doctors need to find out why fluid is building up. Contrast can show a hidden cause.',
+      },
+      {
+        when: {},
+        contrast: 'none',
+        inShort: 'ventricle size, flow and shunt position show on fast plain images',
+        because: 'Ventricular size, transependymal fluid, flow void and shunt position are read from fast non-contrast images.',
+        plain: 'The scan checks the fluid spaces and the shunt. This takes only quick pictures and no contrast.',
+      },
+    ],
+    sources: [
+      {
+        title: 'ACR Appropriateness Criteria: Dementia and Movement Disorders',
+        body: 'American College of Radiology',
+        year: 2015,
+        status: 'confirmed',
+      },
+      {
+        title: 'Common practice',
+        body: 'trade practice, no single published source',
+        year: null,
+        status: 'common practice',
+      },
+    ],
+    commonError: 'Full contrast study for a routine shunt check.',
+    alternatives: 'If contrast cannot be given: thin T2 through the aqueduct and outlets shows most blockages.',
+    searchWords: [
+      'NPH', 'normal pressure hydrocephalus', 'VP shunt', 'ventriculomegaly', 'water on the brain',
+      'enlarged ventricles', 'shunt malfunction', 'aqueductal stenosis', 'magnetic gait', 'hydrocephalis',
+    ],
+  },
+  {
+    id: 'psychiatric-first-episode',
+    region: 'brain',
+    exam: 'MRI brain',
+    question: 'First psychosis or major behavior change: is there an organic cause?',
+    plainQuestion: 'Could a brain problem explain the change in my behavior?',
+    volume: 2,
+    usualBranch: 1,
+    deciders: [
+      {
+        id: 'neuroSigns',
+        kind: 'yesno',
+        ask: 'Are there seizures, fever, fluctuating consciousness, movement disorder or focal signs (suspected encephalitis or mass)?',
+      },
+    ],
+    branches: [
+      {
+        when: { neuroSigns: ['yes'] },
+        contrast: 'iv-with-and-without',
+        inShort: 'signs of encephalitis or a mass call for enhancement',
+        because: 'Signs of encephalitis or a mass justify contrast.',
+        plain: 'Other signs point to swelling in the brain. Contrast helps to show it.',
+      },
+      {
+        when: {},
+        contrast: 'none',
+        inShort: 'the few structural causes of psychosis show on plain images',
+        because: 'The yield is low and the few structural causes are visible without contrast.',
+        plain: 'A plain MRI scan is enough to look for the rare brain causes.',
+      },
+    ],
+    sources: [
+      {
+        title: 'Common practice',
+        body: 'trade practice, no single published source',
+        year: null,
+        status: 'common practice',
+      },
+    ],
+    commonError: 'Contrast as a routine in first-episode psychosis.',
+    alternatives: 'If contrast cannot be given: diffusion and FLAIR; spinal fluid and antibody tests.',
+    searchWords: [
+      'psychosis', 'hallucinations', 'personality change', 'mania', 'schizophrenia', 'behavior change',
+      'altered mental status', 'delusions', 'autoimmune encephalitis', 'catatonia',
+    ],
+  },
+  {
+    id: 'epilepsy-surgery-planning',
+    region: 'brain',
+    exam: 'MRI brain 3T, epilepsy protocol',
+    question: 'Drug-resistant epilepsy: is there a surgical target?',
+    plainQuestion: 'Can a surgeon remove the spot that causes my seizures?',
+    volume: 2,
+    usualBranch: 1,
+    deciders: [
+      {
+        id: 'massOrNew',
+        kind: 'yesno',
+        ask: 'Is a tumor suspected, or has the seizure pattern changed with a new deficit?',
+      },
+    ],
+    branches: [
+      {
+        when: { massOrNew: ['yes'] },
+        contrast: 'iv-with-and-without',
+        inShort: 'a suspected tumor or new deficit needs the lesion characterized',
+        because: 'A suspected tumor or a change in pattern needs enhancement to characterize the lesion.',
+        plain: 'A change in your seizures could mean a growth. Contrast helps to check.',
+      },
+      {
+        when: {},
+        contrast: 'none',
+        inShort: 'scars and malformations show by resolution, not by enhancement',
+        because: 'Subtle cortical dysplasia and hippocampal sclerosis depend on resolution and contrast-free T1 and FLAIR; gadolinium is added only for a found mass.',
+        plain: 'The scan needs very sharp pictures, not contrast.',
+      },
+    ],
+    sources: [
+      {
+        title: 'ACR Appropriateness Criteria: Seizures and Epilepsy',
+        body: 'American College of Radiology',
+        year: 2014,
+        status: 'confirmed',
+      },
+    ],
+    commonError: 'Asking for contrast instead of the dedicated high-resolution epilepsy protocol.',
+    alternatives: 'If contrast cannot be given: diffusion, susceptibility images and arterial spin labeling.',
+    searchWords: [
+      'refractory epilepsy', 'intractable seizures', 'drug resistant epilepsy', 'mesial temporal sclerosis', 'MTS',
+      'hippocampal sclerosis', 'focal cortical dysplasia', 'FCD', 'HARNESS', 'presurgical',
+    ],
+  },
+  {
+    id: 'trigeminal-neuralgia',
+    region: 'brain',
+    exam: 'MRI brain with thin cranial nerve sequences',
+    question: 'Electric-shock facial pain: is a vessel pressing on the trigeminal nerve?',
+    plainQuestion: 'Why do I get sharp pain in my face?',
+    volume: 2,
+    usualBranch: 1,
+    deciders: [
+      {
+        id: 'atypical',
+        kind: 'yesno',
+        ask: 'Is there sensory loss, pain on both sides, age under 40, constant pain, or known cancer?',
+      },
+    ],
+    branches: [
+      {
+        when: { atypical: ['yes'] },
+        contrast: 'iv-with-and-without',
+        inShort: 'atypical facial pain needs tumor and inflammation of the nerve ruled out',
+        because: 'These features raise the chance of tumor, demyelination or perineural spread, which enhancement shows.',
+        plain: 'Some of your symptoms are unusual. Contrast helps find a growth or nerve swelling.',
+      },
+      {
+        when: {},
+        contrast: 'none',
+        inShort: 'thin T2 images show a vessel touching the nerve unaided',
+        because: 'Neurovascular contact is shown by heavily T2-weighted cisternal images with MRA; many centers add contrast when the first look raises a mass. Local choice: guidance for trigeminal symptoms often lists the contrast study for all.',
+        plain: 'Very thin pictures show if a blood vessel is touching the nerve. No contrast is needed for that.',
+      },
+    ],
+    sources: [
+      {
+        title: 'European Academy of Neurology guideline on trigeminal neuralgia',
+        body: 'European Academy of Neurology',
+        year: 2019,
+        status: 'from memory',
+      },
+      {
+        title: 'ACR Appropriateness Criteria: Cranial Neuropathy, 2022 Update',
+        body: 'American College of Radiology',
+        year: 2022,
+        status: 'confirmed',
+      },
+    ],
+    commonError: 'Ordering routine brain MRI with contrast but without the thin cisternal sequence.',
+    alternatives: 'If contrast cannot be given: thin T2 of the cisterns with diffusion.',
+    searchWords: [
+      'TN', 'tic douloureux', 'facial pain', 'face pain', 'CN V', 'fifth nerve', 'neurovascular conflict',
+      'microvascular decompression', 'MVD', 'trigemnial',
+    ],
+  },
+  {
+    id: 'facial-nerve-palsy',
+    region: 'brain',
+    exam: 'MRI brain and temporal bones',
+    question: 'Facial weakness: does it need imaging, and with contrast?',
+    plainQuestion: 'Why is one side of my face weak?',
+    volume: 2,
+    usualBranch: 1,
+    deciders: [
+      {
+        id: 'course',
+        kind: 'choice',
+        ask: 'What is the course?',
+        options: [
+          { id: 'bell', label: 'Sudden, typical, no other nerve involved, and improving or less than about 3 months old' },
+          { id: 'atypical', label: 'Slow onset, recurrent, no recovery by about 3 months, or other nerves involved' },
+        ],
+      },
+    ],
+    branches: [
+      {
+        when: { course: ['bell'] },
+        contrast: 'none',
+        inShort: 'a typical Bell palsy that recovers needs no search for enhancement',
+        because: 'Typical Bell palsy with recovery does not need MRI; if a scan is done to exclude a central cause, non-contrast is enough.',
+        plain: 'Most sudden face weakness gets better by itself. A scan is often not needed.',
+      },
+      {
+        when: {},
+        contrast: 'iv-with-and-without',
+        inShort: 'an atypical palsy needs tumor along the facial nerve ruled out',
+        because: 'Tumor along the facial nerve and perineural spread show as enhancement, which non-contrast images can miss.',
+        plain: 'Because the weakness is not following the usual course, contrast is used to look along the nerve.',
+      },
+    ],
+    sources: [
+      {
+        title: 'ACR Appropriateness Criteria: Cranial Neuropathy, 2022 Update',
+        body: 'American College of Radiology',
+        year: 2022,
+        status: 'confirmed',
+      },
+    ],
+    commonError: 'Contrast MRI in the first week of a typical Bell palsy.',
+    alternatives: 'If contrast cannot be given: thin T2 and diffusion; CT of the temporal bone.',
+    searchWords: [
+      'Bell palsy', 'Bells palsy', 'facial droop', 'facial weakness', 'CN VII', 'seventh nerve', 'facial paralysis',
+      'Ramsay Hunt', 'face drooping',
+    ],
+  },
+  {
+    id: 'cerebral-venous-thrombosis',
+    region: 'brain',
+    exam: 'MRI brain with MR venography',
+    question: 'Suspected clot in the brain veins?',
+    plainQuestion: 'Is there a clot in the veins of my brain?',
+    volume: 2,
+    usualBranch: 1,
+    deciders: [
+      {
+        id: 'pregnant',
+        kind: 'yesno',
+        ask: 'Is the patient pregnant?',
+      },
+    ],
+    branches: [
+      {
+        when: { pregnant: ['yes'] },
+        contrast: 'none',
+        inShort: 'flow images answer the question without exposing the unborn baby to gadolinium',
+        because: 'Flow-based venography with susceptibility and T1 images answers the question without exposing the fetus to gadolinium. If these leave doubt, the radiologist and the obstetric team decide together.',
+        plain: 'This can be checked during pregnancy without contrast.',
+      },
+      {
+        when: {},
+        contrast: 'iv-with-and-without',
+        inShort: 'contrast fills the flow gaps that can pass for clot',
+        because: 'Contrast venography avoids the flow gaps that mimic clot on non-contrast venography and shows cortical vein disease better. Local choice: phase-contrast venography with susceptibility images is accepted in some departments.',
+        plain: 'Slow blood flow can look like a clot on plain MRI pictures. Contrast makes the answer clearer.',
+      },
+    ],
+    sources: [
+      {
+        title: 'Comparison of 2D time-of-flight and 3D contrast-enhanced MR venography in suspected sinus thrombosis',
+        body: 'European Journal of Neurology',
+        year: 2007,
+        status: 'confirmed',
+      },
+      {
+        title: 'ACR Appropriateness Criteria: Cerebrovascular Diseases: Stroke and Stroke-Related Conditions',
+        body: 'American College of Radiology',
+        year: 2024,
+        status: 'from memory',
+      },
+    ],
+    commonError: 'Reading a small transverse sinus on non-contrast venography as thrombosis.',
+    alternatives: 'CT venography; or phase-contrast MR venography with susceptibility images.',
+    searchWords: [
+      'CVT', 'CVST', 'venous sinus thrombosis', 'dural sinus thrombosis', 'MRV', 'MR venogram', 'venography',
+      'sagittal sinus', 'vein clot', 'IIH', 'pseudotumor cerebri', 'idiopathic intracranial hypertension',
+      'postpartum headache',
+    ],
+  },
+  {
+    id: 'chiari-malformation',
+    region: 'brain',
+    exam: 'MRI brain and cervical spine with CSF flow',
+    question: 'Suspected or known Chiari malformation?',
+    plainQuestion: 'Is the bottom of my brain pushed down and causing my symptoms?',
+    volume: 2,
+    usualBranch: 1,
+    deciders: [
+      {
+        id: 'acquired',
+        kind: 'yesno',
+        ask: 'Is low CSF pressure suspected, or is a syrinx newly found with no clear cause?',
+      },
+    ],
+    branches: [
+      {
+        when: { acquired: ['yes'] },
+        contrast: 'iv-with-and-without',
+        inShort: 'a fluid leak or tumor behind the finding shows by enhancement',
+        because: 'Acquired tonsillar descent from a CSF leak and a tumor-related syrinx are told apart by enhancement.',
+        plain: 'Contrast can show why the brain or spine looks this way.',
+      },
+      {
+        when: {},
+        contrast: 'none',
+        inShort: 'tonsil position, syrinx and fluid flow are measured on plain images',
+        because: 'Tonsil position, crowding, syrinx and CSF flow are measured on non-contrast images.',
+        plain: 'The scan measures position and fluid flow. No contrast is needed.',
+      },
+    ],
+    sources: [
+      {
+        title: 'Common practice',
+        body: 'trade practice, no single published source',
+        year: null,
+        status: 'common practice',
+      },
+    ],
+    commonError: 'Contrast for routine Chiari follow-up.',
+    alternatives: 'If contrast cannot be given: T2 of brain and spine with a fluid-sensitive search for a leak.',
+    searchWords: [
+      'Chiari', 'Arnold-Chiari', 'Chiari 1', 'chairi', 'cerebellar tonsils', 'tonsillar ectopia', 'CSF flow',
+      'cine flow', 'cough headache',
+    ],
+  },
+  {
+    id: 'avm-dural-fistula',
+    region: 'brain',
+    exam: 'MRI brain with time-resolved MRA',
+    question: 'Suspected or treated arteriovenous malformation or dural fistula?',
+    plainQuestion: 'Is there an abnormal tangle of blood vessels in my head?',
+    volume: 1,
+    usualBranch: 0,
+    deciders: [],
+    branches: [
+      {
+        when: {},
+        contrast: 'iv-with-and-without',
+        inShort: 'early filling of a vein needs a timed contrast run',
+        because: 'Early venous filling needs a time-resolved contrast run, and enhancement helps delineate the nidus.',
+        plain: 'Contrast lets the scanner watch blood move from arteries to veins.',
+      },
+    ],
+    sources: [
+      {
+        title: 'ACR Appropriateness Criteria: Cerebrovascular Diseases: Aneurysm, Vascular Malformation, and Subarachnoid Hemorrhage',
+        body: 'American College of Radiology',
+        year: 2021,
+        status: 'from memory',
+      },
+    ],
+    commonError: 'Ordering MRA without contrast alone, which shows the vessels but not the order in which they fill.',
+    alternatives: 'Arterial spin labeling shows shunting without contrast; catheter angiography remains definitive.',
+    searchWords: [
+      'AVM', 'arteriovenous malformation', 'dAVF', 'dural AV fistula', 'TWIST', 'time resolved MRA', 'nidus',
+      'shunt vessel',
+    ],
+  },
+  {
+    id: 'vasculitis-vessel-wall',
+    region: 'brain',
+    exam: 'MRI brain with intracranial vessel wall imaging',
+    question: 'Suspected vasculitis of the brain vessels?',
+    plainQuestion: 'Are the blood vessels in my brain inflamed?',
+    volume: 1,
+    usualBranch: 0,
+    deciders: [],
+    branches: [
+      {
+        when: {},
+        contrast: 'iv-with-and-without',
+        inShort: 'an enhancing vessel wall is the finding that is looked for',
+        because: 'Wall enhancement and meningeal enhancement are the target findings; black-blood images before and after contrast are needed.',
+        plain: 'Contrast lights up inflamed vessel walls. Plain MRI pictures cannot show this.',
+      },
+    ],
+    sources: [
+      {
+        title: 'ACR Appropriateness Criteria: Cerebrovascular Diseases: Aneurysm, Vascular Malformation, and Subarachnoid Hemorrhage',
+        body: 'American College of Radiology',
+        year: 2021,
+        status: 'from memory',
+      },
+    ],
+    commonError: 'Ordering MRA alone, which shows the lumen but not the wall.',
+    alternatives: 'MRA and diffusion alone, or catheter angiography.',
+    searchWords: [
+      'CNS vasculitis', 'vessel wall imaging', 'VWI', 'PACNS', 'primary angiitis', 'RCVS', 'cerebral vasculitis',
+      'black blood',
+    ],
+  },
+  {
+    id: 'brain-contrast-completion',
+    region: 'brain',
+    exam: 'MRI brain, to complete a recent scan',
+    question: 'Contrast images were asked for after a recent brain MRI without contrast: must the whole study be done again?',
+    plainQuestion: 'Do I need my whole brain scan again, or only the part with contrast?',
+    volume: 1,
+    usualBranch: 0,
+    deciders: [
+      {
+        id: 'usableBaseline',
+        kind: 'yesno',
+        ask: 'Were the plain images taken within the last few days on comparable equipment, are they at hand, and has nothing happened since (no surgery, biopsy or bleeding)?',
+        help: 'The imaging department can tell. In doubt answer no: the plain images are then taken again.',
+      },
+    ],
+    branches: [
+      {
+        when: { usableBaseline: ['yes'] },
+        contrast: 'iv-with-only',
+        inShort: 'usable plain images exist and only the contrast phase is missing',
+        because: 'Enhancement is judged against pre-contrast images, and usable ones already exist, so only the contrast phase is added. Local choice: some departments take a short plain T1 series first all the same, since blood and fat are bright on T1 and can pass for enhancement.',
+        plain: 'Your earlier pictures are recent enough to use. Only the part with contrast is missing, so this visit is shorter.',
+      },
+      {
+        when: {},
+        contrast: 'iv-with-and-without',
+        inShort: 'enhancement must be judged against fresh plain images from the same visit',
+        because: 'Time, bleeding, treatment or another scanner in between can pass for enhancement or hide it, so the plain images are taken again and compared within one visit.',
+        plain: 'Your earlier pictures are not a close enough match. We take the first pictures again, and then we add contrast.',
+      },
+    ],
+    sources: [
+      {
+        title: 'Common practice',
+        body: 'trade practice, no single published source',
+        year: null,
+        status: 'common practice',
+      },
+    ],
+    commonError: 'Ordering a whole new study without and with contrast when plain images from a few days ago can be used, or ordering the contrast phase alone against old images.',
+    alternatives: 'If contrast cannot be given: diffusion, susceptibility images and arterial spin labeling beside the earlier scan, with their limits stated.',
+    searchWords: [
+      'add contrast', 'add-on contrast', 'contrast only', 'with contrast only', 'post contrast only', 'postcontrast',
+      'callback', 'call back', 'recall', 'incomplete study', 'addendum', 'report recommends contrast',
+      'bring patient back',
+    ],
+  },
+]
