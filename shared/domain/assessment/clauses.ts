@@ -21,7 +21,9 @@ export function sentenceOf({ question, guidance, suggestion, turnedBy }: Judgeme
     return `${question.exam}, with or without contrast: ${open === 1 ? 'one answer decides' : `${open} answers decide`}`
   }
   const reason = turnedBy === null ? guidance.inShort : turnedInShort[turnedBy.id] ?? 'a safety finding holds contrast back'
-  return `${question.exam} ${outcomeWords[suggestion].phrase}, because ${reason}`
+  // "MRI pituitary, dynamic, without contrast": an exam named with a comma needs another one.
+  const comma = question.exam.includes(',') ? ',' : ''
+  return `${question.exam}${comma} ${outcomeWords[suggestion].phrase}, because ${reason}`
 }
 
 /** The guidance's reason, each safety finding that turned, barred or holds, then one line on the kidneys. */

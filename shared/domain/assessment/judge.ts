@@ -39,9 +39,10 @@ export function kidneyOf(inputs: AssessmentInputs, rules: AssessmentRules): Kidn
     plannedAt: inputs.plannedAt,
     patient: inputs.patient,
     readings: inputs.readings,
-    recordState: inputs.record.state,
+    record: inputs.record,
     screening: inputs.screening,
     setting: inputs.setting,
+    priority: inputs.priority,
     policy: rules.policy,
   })
 }
@@ -55,6 +56,7 @@ export function judge(inputs: AssessmentInputs, rules: AssessmentRules, options:
   const wanted = options.decided?.contrast ?? asked
   const kidney = options.kidney ?? kidneyOf(inputs, rules)
   const at = inputs.plannedAt ?? inputs.now
+  const age = ageBounds(inputs.patient.birthDate, at, policy.department.timeZone)
   const context: SafetyContext = {
     outcome: wanted,
     now: inputs.now,
@@ -63,7 +65,7 @@ export function judge(inputs: AssessmentInputs, rules: AssessmentRules, options:
     priority: inputs.priority,
     setting: inputs.setting,
     patient: inputs.patient,
-    age: ageBounds(inputs.patient.birthDate, at, policy.department.timeZone),
+    age,
     screening: inputs.screening,
     exposures: inputs.exposures,
     recordState: inputs.record.state,
@@ -76,7 +78,10 @@ export function judge(inputs: AssessmentInputs, rules: AssessmentRules, options:
   const suggestion = turnedBy?.turns ?? wanted
   const ranked = suggestion === 'discuss' ? wanted : suggestion
   const agents = ranked !== null && usesContrast(ranked)
-    ? rankAgents({ outcome: ranked, patient: inputs.patient, at, kidney, findings, exposures: inputs.exposures, policy, agents: rules.agents })
+    ? rankAgents({
+        outcome: ranked, policy, agents: rules.agents, barred: barredAgents(findings),
+        patient: { ageYears: age?.youngest ?? null, weightKg: inputs.patient.weightKg },
+      })
     : null
   return {
     question, guidance, wanted, suggestion, turnedBy, kidney, findings, agents,
@@ -94,4 +99,27 @@ function turningFinding(wanted: ContrastOutcome | null, findings: SafetyFinding[
   if (wanted === null || wanted === 'none') return null
   const turning = findings.filter(found => found.turns !== null && found.turns !== wanted)
   return turning.find(found => found.turns === 'none') ?? turning[0] ?? null
+}
+
+/** Why a finding bars an agent, short enough for a list of agents; its full words stand under the findings. */
+const barReasons: Record<string, string> = {
+  'kidney-unsteady': 'Group I: not while creatinine is unsteady',
+  'kidney-below-hold': 'Group I: not at this eGFR',
+  'kidney-group-one-barred': 'Group I: not at this eGFR',
+  'kidney-group-one-without-value': 'Group I: not without a current eGFR',
+  'dialysis-hemodialysis': 'Group I: not on dialysis',
+  'dialysis-peritoneal': 'Not group II: not on dialysis',
+  'dialysis-unknown': 'Group I: not while dialysis is not ruled out',
+  'condition-nsf': 'Not with known nephrogenic systemic fibrosis',
+  'condition-nsf-unknown': 'Group I: not while nephrogenic systemic fibrosis is not ruled out',
+  'condition-liver': 'Group I: not with severe liver disease',
+  'condition-liver-acute': 'Group I: not with severe liver disease',
+  'child-under-one': 'Not labeled from birth, or not macrocyclic',
+  'history-not-obtainable': 'Group I: not without a history',
+}
+
+function barredAgents(findings: SafetyFinding[]): { agent: AgentId, reason: string }[] {
+  return findings.flatMap(found => found.barsAgents.map(agent => ({
+    agent, reason: barReasons[found.id] ?? (found.topic === 'reaction' ? 'An earlier reaction to it' : found.text),
+  })))
 }

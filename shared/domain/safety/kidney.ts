@@ -1,5 +1,6 @@
 import type { SafetyContext } from './context'
 import type { SafetyFinding } from './types'
+import { isAcute } from '../kidney/injury'
 import { cannotWait, groupOneAgents, mayBeIntravenous } from './context'
 import { finding } from './finding'
 import { safetySources } from './sources'
@@ -24,13 +25,8 @@ export function findKidney(context: SafetyContext): SafetyFinding[] {
   return [...findInjury(context), ...findLevel(context), ...findMissing(context)]
 }
 
-function unsteady({ kidney }: SafetyContext): boolean {
-  return kidney.injury.status === 'aki' || kidney.injury.status === 'aki-presumed'
-    || kidney.injury.status === 'recent-aki' || kidney.injury.steady === false
-}
-
 function findInjury(context: SafetyContext): SafetyFinding[] {
-  if (unsteady(context)) {
+  if (isAcute(context.kidney.injury)) {
     return [finding({
       id: 'kidney-unsteady', topic: 'kidney', severity: 'hold',
       text: 'Creatinine is not steady or shows acute injury, so eGFR misleads: treated like an eGFR below 30 until a radiologist says otherwise.',
@@ -39,12 +35,12 @@ function findInjury(context: SafetyContext): SafetyFinding[] {
       source: safetySources.kdigoInjury,
     })]
   }
-  const ill = context.screening.acuteIllness === 'yes' || context.screening.acuteIllness === 'unknown'
-  if (ill && context.kidney.injury.status === 'insufficient') {
+  const ill = context.setting !== 'outpatient' || context.screening.acuteIllness === 'yes' || context.screening.acuteIllness === 'unknown'
+  if (ill && context.kidney.creatinine !== null && context.kidney.injury.status === 'insufficient') {
     return [finding({
       id: 'kidney-injury-not-judged', topic: 'kidney', severity: 'caution',
-      text: 'Acute illness is stated or not known, and the results do not suffice to judge acute kidney injury: a person judges it before contrast.',
-      plain: 'You have been unwell. A doctor checks your kidney tests before contrast.',
+      text: 'The patient is in hospital or may be acutely ill, and the results do not suffice to judge acute kidney injury: a person judges it before contrast.',
+      plain: 'You may be ill just now. A doctor checks your kidney tests before contrast.',
       addsNeeds: ['radiologist-word'], asksRadiologist: true,
       source: safetySources.kdigoInjury,
     })]
@@ -54,7 +50,7 @@ function findInjury(context: SafetyContext): SafetyFinding[] {
 
 function findLevel(context: SafetyContext): SafetyFinding[] {
   const gate = context.kidney.gateEgfr
-  if (gate === null || unsteady(context)) return []
+  if (gate === null || isAcute(context.kidney.injury)) return []
   const hold = context.policy.holdBelowEgfr.value
   if (gate < hold) {
     return [finding({
