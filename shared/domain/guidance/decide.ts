@@ -1,5 +1,5 @@
 import { accepts, standing } from './deciders'
-import { reach } from './reach'
+import { outcomesOf, reach } from './reach'
 import type { Reached } from './reach'
 import type { Answers, ClinicalQuestion, Decider, GuidanceResult } from './types'
 
@@ -19,14 +19,13 @@ import type { Answers, ClinicalQuestion, Decider, GuidanceResult } from './types
  */
 export function decide(question: ClinicalQuestion, answers: Answers): GuidanceResult {
   const reached = reach(question, answers)
-  const outcomes = [...new Set([...reached].sort((a, b) => a.index - b.index).map(each => each.branch.contrast))]
   const matters = (decider: Decider): boolean => {
     const state = standing(decider, answers)
     if (state === 'missing') return moves(reached, decider, each => String(each.index))
     return state === 'unknown' && moves(reached, decider, each => each.branch.contrast)
   }
   const open = question.deciders.filter(matters).map(decider => decider.id)
-  if (open.length > 0) return { status: 'needs-answers', deciders: open, possible: outcomes }
+  if (open.length > 0) return { status: 'needs-answers', deciders: open, possible: outcomesOf(reached) }
 
   const chosen = reached.find(each => accepts(each.branch, answers)) ?? last(reached)
   return {

@@ -1,5 +1,5 @@
 import type { ContrastOutcome } from '../contrast/outcome'
-import { completions, decidedValues, firstHit } from './deciders'
+import { completions, firstHit } from './deciders'
 import type { Answers, Branch, ClinicalQuestion } from './types'
 
 /** One full set of answers that is still possible, and the branch it leads to. */
@@ -24,38 +24,16 @@ export function reach(question: ClinicalQuestion, answers: Answers): Reached[] {
   })
 }
 
-/** Indexes of the branches these answers can still lead to, in the table's order. Throws as `reach` does. */
-export function reachableBranches(question: ClinicalQuestion, answers: Answers): number[] {
-  return [...new Set(reach(question, answers).map(reached => reached.index))].sort((a, b) => a - b)
-}
-
-/** Contrast outcomes these answers can still lead to, each once, in the table's order. Throws as `reach` does. */
-export function reachableOutcomes(question: ClinicalQuestion, answers: Answers): ContrastOutcome[] {
-  const outcomes = reachableBranches(question, answers).flatMap(index => question.branches[index]?.contrast ?? [])
-  return [...new Set(outcomes)]
-}
-
-/** What giving one decider another answer could lead to. */
-export interface WhatIf {
-  decider: string
-  value: string
-  /** Outcomes then possible. One: the answer would change to it. Several: it then depends on further answers. */
-  possible: ContrastOutcome[]
+/** The contrast outcomes among what was reached, each once, in the table's order. */
+export function outcomesOf(reached: Reached[]): ContrastOutcome[] {
+  const inOrder = [...reached].sort((a, b) => a.index - b.index)
+  return [...new Set(inOrder.map(each => each.branch.contrast))]
 }
 
 /**
- * The single answers that would change the contrast, for the clause "Unless": each decider takes each other value while
- * the rest stays. Empty while the answers still leave more than one outcome. Throws as `reach` does.
+ * Contrast outcomes these answers can still lead to, each once, in the table's order: one where the outcome is settled,
+ * several where a missing or unknown fact could still turn it. Throws as `reach` does.
  */
-export function whatIfs(question: ClinicalQuestion, answers: Answers): WhatIf[] {
-  const [now, ...others] = reachableOutcomes(question, answers)
-  if (now === undefined || others.length > 0) return []
-  return question.deciders.flatMap(decider => decidedValues(decider)
-    .filter(value => value !== answers[decider.id])
-    .map(value => ({
-      decider: decider.id,
-      value,
-      possible: reachableOutcomes(question, { ...answers, [decider.id]: value }),
-    }))
-    .filter(whatIf => whatIf.possible.some(outcome => outcome !== now)))
+export function reachableOutcomes(question: ClinicalQuestion, answers: Answers): ContrastOutcome[] {
+  return outcomesOf(reach(question, answers))
 }

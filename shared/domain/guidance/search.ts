@@ -1,4 +1,5 @@
 import MiniSearch from 'minisearch'
+import type { SearchResult } from 'minisearch'
 import { regionLabel } from './regions'
 import { indexTerms, searchTerm, splitSearchText } from './search-words'
 import type { ClinicalQuestion } from './types'
@@ -12,7 +13,7 @@ export interface QuestionSearch {
 }
 
 /** Added to a question's score, per volume step: among equal matches, the everyday question comes first. */
-const volumeWeight = 0.12
+const volumeWeight = 0.2
 
 /**
  * An index over clinical questions, built once per guidance version, on the server and in the browser alike. Words match
@@ -54,11 +55,14 @@ export function createQuestionSearch(questions: ClinicalQuestion[]): QuestionSea
       // Short words are mostly abbreviations, where one letter makes another disease.
       fuzzy: term => (term.length < 5 ? false : term.length < 8 ? 1 : 2),
       prefix: term => term.length > 1,
-      weights: { prefix: 0.5, fuzzy: 0.35 },
+      weights: { prefix: 0.35, fuzzy: 0.25 },
       boostDocument: id => 1 + volumeWeight * ((byId.get(String(id))?.volume ?? 1) - 1),
       filter: result => kept(String(result.id)),
     })
-    const share = (result: { queryTerms: string[] }) => result.queryTerms.length
-    return found.sort((a, b) => share(b) - share(a) || b.score - a.score).map(result => String(result.id))
+    // Parts of longer words add up over many fields; a word found as it was typed counts for more than all of them.
+    const score = (result: SearchResult) => result.score * (1 + terms.filter(term => result.terms.includes(term)).length)
+    return found
+      .sort((a, b) => b.queryTerms.length - a.queryTerms.length || score(b) - score(a))
+      .map(result => String(result.id))
   }
 }

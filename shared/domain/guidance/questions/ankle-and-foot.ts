@@ -21,14 +21,14 @@ export const ankleAndFootQuestions: ClinicalQuestion[] = [
       {
         when: { surgeryUnclear: ['yes'] },
         contrast: 'intra-articular',
-        inShort: 'contrast in the joint settles what the plain study left open',
+        inShort: 'a filled joint settles what the first study left open',
         because: 'Contrast in the joint outlines the lateral ligaments and unstable cartilage flaps when the routine study leaves the surgeon in doubt.',
         plain: 'Contrast in the joint shows small tears that the first scan could not settle.',
       },
       {
         when: {},
         contrast: 'none',
-        inShort: 'ligaments, tendons and the talar dome show on plain images',
+        inShort: 'ligaments, tendons and the talar dome show on non-contrast images',
         because: 'Ligament and tendon tears and osteochondral lesions are read without contrast.',
         plain: 'Torn ligaments and tendons show on the MRI. No contrast is needed.',
       },
@@ -179,7 +179,7 @@ export const ankleAndFootQuestions: ClinicalQuestion[] = [
       {
         when: {},
         contrast: 'none',
-        inShort: 'the nodule and plantar plate tears show on plain images',
+        inShort: 'the nodule and plantar plate tears show on non-contrast images',
         because: 'A small dark nodule on T1 and plantar plate tears are seen without contrast.',
         plain: 'The thick nerve shows on the MRI. No contrast is needed.',
       },

@@ -28,7 +28,7 @@ export const aortaAndVesselsQuestions: ClinicalQuestion[] = [
       {
         when: {},
         contrast: 'none',
-        inShort: 'gated plain images measure the aorta reliably, scan after scan',
+        inShort: 'gated non-contrast images measure the aorta reliably, scan after scan',
         because: 'ECG-gated non-contrast 3D images measure diameter reliably, and the same patient will be scanned many times.',
         plain: 'The width of the artery can be measured without contrast. You will need many scans, so less is better.',
       },

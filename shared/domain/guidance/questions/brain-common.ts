@@ -26,7 +26,7 @@ export const brainCommonQuestions: ClinicalQuestion[] = [
       {
         when: { tumorInfection: ['yes'] },
         contrast: 'iv-with-and-without',
-        inShort: 'headache with these warning signs needs tumor and infection ruled out',
+        inShort: 'a headache with these warning signs needs tumor and infection ruled out',
         because: 'Tumor, meningeal disease and abscess are judged by enhancement, so the added phase changes what can be seen or excluded. Disc swelling adds a search for a mass and for venous sinus disease. Cluster-type attacks call for a look at the pituitary and cavernous sinus, which also needs enhancement (from memory).',
         plain: 'Some points in your history need a closer look. Contrast helps show swelling, infection or a growth, if there is one.',
       },
@@ -319,7 +319,7 @@ export const brainCommonQuestions: ClinicalQuestion[] = [
       {
         when: {},
         contrast: 'none',
-        inShort: 'an uncomplicated first seizure is answered by high-resolution plain images',
+        inShort: 'an uncomplicated first seizure is answered by high-resolution non-contrast images',
         because: 'Hippocampal sclerosis, cortical malformation, old injury and cavernoma are seen on high-resolution non-contrast images; contrast can be added if those show something unexpected. Local choice: some departments add contrast for a first seizure after about age 40.',
         plain: 'Detailed pictures of the brain show most causes of seizures without contrast. It can be added later if needed.',
       },

@@ -28,7 +28,7 @@ export const brainUncommonQuestions: ClinicalQuestion[] = [
       {
         when: {},
         contrast: 'discuss',
-        inShort: 'thin plain images may be enough to measure a small quiet meningioma',
+        inShort: 'thin non-contrast images may be enough to measure a small quiet meningioma',
         because: 'For a small convexity lesion with a contrast baseline, thin T2 or 3D T1 may be enough to measure size; departments differ and the radiologist should choose.',
         plain: 'A plain MRI scan may be enough to check the size. The radiologist will decide.',
       },
@@ -119,7 +119,7 @@ export const brainUncommonQuestions: ClinicalQuestion[] = [
       {
         when: {},
         contrast: 'none',
-        inShort: 'ventricle size, flow and shunt position show on fast plain images',
+        inShort: 'ventricle size, flow and shunt position show on fast non-contrast images',
         because: 'Ventricular size, transependymal fluid, flow void and shunt position are read from fast non-contrast images.',
         plain: 'The scan checks the fluid spaces and the shunt. This takes only quick pictures and no contrast.',
       },
@@ -171,7 +171,7 @@ export const brainUncommonQuestions: ClinicalQuestion[] = [
       {
         when: {},
         contrast: 'none',
-        inShort: 'the few structural causes of psychosis show on plain images',
+        inShort: 'the few structural causes of psychosis show on non-contrast images',
         because: 'The yield is low and the few structural causes are visible without contrast.',
         plain: 'A plain MRI scan is enough to look for the rare brain causes.',
       },
@@ -418,7 +418,7 @@ export const brainUncommonQuestions: ClinicalQuestion[] = [
       {
         when: {},
         contrast: 'none',
-        inShort: 'tonsil position, syrinx and fluid flow are measured on plain images',
+        inShort: 'tonsil position, syrinx and fluid flow are measured on non-contrast images',
         because: 'Tonsil position, crowding, syrinx and CSF flow are measured on non-contrast images.',
         plain: 'The scan measures position and fluid flow. No contrast is needed.',
       },
@@ -516,23 +516,23 @@ export const brainUncommonQuestions: ClinicalQuestion[] = [
       {
         id: 'usableBaseline',
         kind: 'yesno',
-        ask: 'Were the plain images taken within the last few days on comparable equipment, are they at hand, and has nothing happened since (no surgery, biopsy or bleeding)?',
-        help: 'The imaging department can tell. In doubt answer no: the plain images are then taken again.',
+        ask: 'Were the non-contrast images taken within the last few days on comparable equipment, are they at hand, and has nothing happened since (no surgery, biopsy or bleeding)?',
+        help: 'The imaging department can tell. In doubt answer no: the non-contrast images are then taken again.',
       },
     ],
     branches: [
       {
         when: { usableBaseline: ['yes'] },
         contrast: 'iv-with-only',
-        inShort: 'usable plain images exist and only the contrast phase is missing',
-        because: 'Enhancement is judged against pre-contrast images, and usable ones already exist, so only the contrast phase is added. Local choice: some departments take a short plain T1 series first all the same, since blood and fat are bright on T1 and can pass for enhancement.',
+        inShort: 'usable non-contrast images exist and only the contrast phase is missing',
+        because: 'Enhancement is judged against pre-contrast images, and usable ones already exist, so only the contrast phase is added. Local choice: some departments take a short non-contrast T1 series first all the same, since blood and fat are bright on T1 and can pass for enhancement.',
         plain: 'Your earlier pictures are recent enough to use. Only the part with contrast is missing, so this visit is shorter.',
       },
       {
         when: {},
         contrast: 'iv-with-and-without',
-        inShort: 'enhancement must be judged against fresh plain images from the same visit',
-        because: 'Time, bleeding, treatment or another scanner in between can pass for enhancement or hide it, so the plain images are taken again and compared within one visit.',
+        inShort: 'enhancement must be judged against fresh non-contrast images from the same visit',
+        because: 'Time, bleeding, treatment or another scanner in between can pass for enhancement or hide it, so the non-contrast images are taken again and compared within one visit.',
         plain: 'Your earlier pictures are not a close enough match. We take the first pictures again, and then we add contrast.',
       },
     ],
@@ -544,7 +544,7 @@ export const brainUncommonQuestions: ClinicalQuestion[] = [
         status: 'common practice',
       },
     ],
-    commonError: 'Ordering a whole new study without and with contrast when plain images from a few days ago can be used, or ordering the contrast phase alone against old images.',
+    commonError: 'Ordering a whole new study without and with contrast when non-contrast images from a few days ago can be used, or ordering the contrast phase alone against old images.',
     alternatives: 'If contrast cannot be given: diffusion, susceptibility images and arterial spin labeling beside the earlier scan, with their limits stated.',
     searchWords: [
       'add contrast', 'add-on contrast', 'contrast only', 'with contrast only', 'post contrast only', 'postcontrast',

@@ -93,7 +93,7 @@ export const hipQuestions: ClinicalQuestion[] = [
       {
         when: { surgery: ['yes'] },
         contrast: 'intra-articular',
-        inShort: 'contrast in the joint fills a labral tear before surgery',
+        inShort: 'a filled joint shows a labral tear before surgery',
         because: 'Intra-articular contrast separates labrum from capsule and fills the tear, with better sensitivity than standard MRI. Local choice: sites without a 3T scanner may start with the arthrogram.',
         plain: 'Contrast in the joint flows into a tear and shows it.',
       },

@@ -15,7 +15,7 @@ export const kneeQuestions: ClinicalQuestion[] = [
       {
         when: {},
         contrast: 'none',
-        inShort: 'menisci, ligaments and bone show fully on plain images',
+        inShort: 'menisci, ligaments and bone show fully on non-contrast images',
         because: 'Meniscus, cruciate ligaments and marrow are complete on proton density and fluid-sensitive images.',
         plain: 'A tear shows clearly on plain MRI pictures. Contrast would not help.',
       },
@@ -62,7 +62,7 @@ export const kneeQuestions: ClinicalQuestion[] = [
       {
         when: {},
         contrast: 'none',
-        inShort: 'cartilage, bone swelling and meniscal tears show on plain images',
+        inShort: 'cartilage, bone swelling and meniscal tears show on non-contrast images',
         because: 'Cartilage, bone edema and meniscal tears are non-contrast findings. In an older adult with osteoarthritis on X-ray, MRI often changes nothing.',
         plain: 'Worn cartilage shows on MRI pictures without contrast. Many people do not need an MRI for this.',
       },

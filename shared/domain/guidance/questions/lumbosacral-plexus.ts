@@ -28,7 +28,7 @@ export const lumbosacralPlexusQuestions: ClinicalQuestion[] = [
       {
         when: {},
         contrast: 'none',
-        inShort: 'nerve size and signal show on plain neurography',
+        inShort: 'nerve size and signal show on non-contrast neurography',
         because: 'Neurography without contrast shows nerve size and signal.',
         plain: 'Special nerve pictures show the problem without contrast.',
       },

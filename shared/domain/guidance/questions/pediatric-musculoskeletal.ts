@@ -21,7 +21,7 @@ export const pediatricMusculoskeletalQuestions: ClinicalQuestion[] = [
       {
         when: { stirClean: ['yes'] },
         contrast: 'none',
-        inShort: 'a normal plain scan already excludes bone infection',
+        inShort: 'a normal non-contrast scan already excludes bone infection',
         because: 'A normal STIR excludes osteomyelitis and contrast can be spared.',
         plain: 'The first pictures look normal, so no contrast is needed.',
       },
@@ -80,7 +80,7 @@ export const pediatricMusculoskeletalQuestions: ClinicalQuestion[] = [
       {
         when: {},
         contrast: 'none',
-        inShort: 'established shape and extent show on plain images',
+        inShort: 'established shape and extent show on non-contrast images',
         because: 'Established shape and extent are read without contrast.',
         plain: 'MRI pictures without contrast show the shape of the hip.',
       },

@@ -28,7 +28,7 @@ export const pediatricSpineQuestions: ClinicalQuestion[] = [
       {
         when: {},
         contrast: 'none',
-        inShort: 'cord level, fatty filum and syrinx show on plain images',
+        inShort: 'cord level, fatty filum and syrinx show on non-contrast images',
         because: 'Conus level, fatty filum, syrinx and Chiari malformation are non-contrast findings.',
         plain: 'MRI pictures without contrast show the cord and where it ends.',
       },

@@ -61,7 +61,7 @@ export const pituitaryQuestions: ClinicalQuestion[] = [
       {
         when: {},
         contrast: 'discuss',
-        inShort: 'thin plain images may be enough to measure a stable macroadenoma',
+        inShort: 'thin non-contrast images may be enough to measure a stable macroadenoma',
         because: 'For a stable untreated macroadenoma with a contrast baseline, coronal T2 with T1 can measure size and chiasm contact; the radiologist should decide whether contrast is still needed.',
         plain: 'A plain MRI scan may be enough to check the size. The radiologist will decide.',
       },

@@ -89,7 +89,7 @@ export const shoulderQuestions: ClinicalQuestion[] = [
       {
         when: { surgery: ['yes'] },
         contrast: 'intra-articular',
-        inShort: 'contrast in the joint opens the labrum before surgery',
+        inShort: 'a filled joint opens the labrum to view before surgery',
         because: 'Dilute contrast in the joint opens the labrum and capsule and raises the detection of labral tears and re-tears.',
         plain: 'Contrast put into the joint flows into a tear and shows it.',
       },

@@ -21,7 +21,7 @@ export const softTissueAndBoneQuestions: ClinicalQuestion[] = [
       {
         when: { benignOnUltrasound: ['yes'] },
         contrast: 'none',
-        inShort: 'fat and fluid in a benign lump show on plain images',
+        inShort: 'fat and fluid in a benign lump show on non-contrast images',
         because: 'If MRI is needed at all, fat and fluid are proven on non-contrast images.',
         plain: 'The MRI can confirm a fatty lump or a fluid sac. No contrast is needed.',
       },
@@ -152,7 +152,7 @@ export const softTissueAndBoneQuestions: ClinicalQuestion[] = [
       {
         when: { benignXray: ['yes'] },
         contrast: 'none',
-        inShort: 'extent of a clearly benign lesion shows on plain images',
+        inShort: 'extent of a clearly benign lesion shows on non-contrast images',
         because: 'Extent and marrow fat are shown without contrast; often no MRI is needed.',
         plain: 'A harmless spot needs at most a scan without contrast.',
       },

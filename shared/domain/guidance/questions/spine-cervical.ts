@@ -34,7 +34,7 @@ export const spineCervicalQuestions: ClinicalQuestion[] = [
       {
         when: {},
         contrast: 'none',
-        inShort: 'discs, bone spurs and fractures show fully on plain images',
+        inShort: 'discs, bone spurs and fractures show fully on non-contrast images',
         because: 'Disc, osteophyte and fracture are seen without contrast, and enhancement does not change the choice of level.',
         plain: 'A pinched nerve shows well on the MRI. No contrast is needed.',
       },

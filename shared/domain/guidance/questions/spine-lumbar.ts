@@ -53,7 +53,7 @@ export const spineLumbarQuestions: ClinicalQuestion[] = [
       {
         when: {},
         contrast: 'none',
-        inShort: 'discs, stenosis and nerve roots show fully on plain images',
+        inShort: 'discs, stenosis and nerve roots show fully on non-contrast images',
         because: 'Disc herniation, stenosis and acute fracture are complete on non-contrast T1, T2 and STIR. Without red flags, imaging itself is of little use before about six weeks of treatment.',
         plain: 'Discs, nerves and fresh breaks show well on plain MRI pictures. Contrast would not add anything.',
       },
@@ -164,7 +164,7 @@ export const spineLumbarQuestions: ClinicalQuestion[] = [
       {
         when: {},
         contrast: 'none',
-        inShort: 'a large disc shows at once on plain images and speed matters',
+        inShort: 'a large disc shows at once on non-contrast images and speed matters',
         because: 'A large disc is by far the usual cause and shows on sagittal and axial T2; speed matters most. If no disc explains the signs, contrast is added in the same visit.',
         plain: 'The most common cause is a disc. It shows right away on the MRI. No contrast is needed.',
       },

@@ -80,7 +80,7 @@ export const spineThoracicQuestions: ClinicalQuestion[] = [
       {
         when: {},
         contrast: 'none',
-        inShort: 'fracture, disc and cord compression show on plain images',
+        inShort: 'fracture, disc and cord compression show on non-contrast images',
         because: 'Fracture, disc and cord compression are seen on T1, T2 and STIR.',
         plain: 'MRI pictures without contrast show breaks and disc problems.',
       },

@@ -28,7 +28,7 @@ export const spineWholeQuestions: ClinicalQuestion[] = [
       {
         when: {},
         contrast: 'none',
-        inShort: 'bone deposits and cord compression stand out on plain images at once',
+        inShort: 'bone deposits and cord compression stand out on non-contrast images at once',
         because: 'Marrow deposits stand out on T1 and STIR because fat is replaced, and compression shows on T2; the scan should not wait for contrast. If these images do not explain the signs, contrast is added in the same visit. Local choice: several guidelines list the contrast study first for cancer with cord signs.',
         plain: 'Spots in the bones and pressure on the cord show clearly without contrast, and the scan is faster.',
       },

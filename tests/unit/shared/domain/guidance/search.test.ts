@@ -117,6 +117,12 @@ describe('the question search', () => {
     expect(questions.search('PSC')).not.toContain('spinal-metastases-cord-compression')
   })
 
+  it('puts the question that knows an abbreviation before those with a word that begins like it', () => {
+    expect(questions.search('DI')[0]).toBe('hypopituitarism-avp-deficiency')
+    expect(questions.search('MI')[0]).toBe('ischemia-viability')
+    expect(questions.search('AS')[0]).toBe('sacroiliitis')
+  })
+
   it('keeps the questions of one region where a region is chosen', () => {
     const found = questions.search('fracture', { region: 'hip' })
     expect(found[0]).toBe('hip-occult-fracture')
