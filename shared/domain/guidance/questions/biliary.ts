@@ -126,7 +126,7 @@ export const biliaryQuestions: ClinicalQuestion[] = [
         status: 'from memory',
       },
     ],
-    commonError: 'Ordering the usual contrast agent, which is not passed into bile and so does not show the leak.',
+    commonError: 'Ordering the usual contrast agent, which hardly passes into bile and so does not show the leak.',
     alternatives: 'MRCP without contrast shows collections; nuclear medicine biliary scan.',
     searchWords: [
       'biloma', 'bile leak', 'cholecystectomy', 'post cholecystectomy', 'duct injury', 'hepatobiliary',
