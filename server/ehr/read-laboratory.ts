@@ -1,0 +1,109 @@
+import type { SearchParams } from 'fhir-kit-client'
+import type { LabReading } from '#shared/domain/kidney/types'
+import type { Capabilities, EhrSession } from './client'
+import { creatinineLoinc, cystatinLoinc, loincRefs, panelLoinc, tokenList } from './codes'
+import { EhrUnavailable } from './errors'
+import { daysBefore } from './fhir-time'
+import { asObservation, isPanel, mapLaboratory } from './map-laboratory'
+import { observationResource, type FhirJson, type ObservationResource } from './resources'
+import { joinRows, patientForms, readRows, type Rows } from './read-rows'
+import { specimenOf, specimensOf } from './specimen'
+import { localTarget, namesPatient } from './subject'
+import type { EhrSettings } from './settings'
+
+export interface LaboratoryQuestion {
+  session: EhrSession
+  settings: EhrSettings
+  patientId: string
+  since: string | null
+  zone: string
+  capabilities: Promise<Capabilities | null>
+}
+
+/** Most single resources (panel parts, specimens) fetched in one reading. */
+const mostFetched = 20
+
+/**
+ * Every creatinine and cystatin C of the patient: by code, inside panels, as panel members, and by name under codes this
+ * department has not been told about. Newest first.
+ */
+export async function readLaboratory(question: LaboratoryQuestion): Promise<{ rows: Rows<ObservationResource>, readings: LabReading[] }> {
+  const [coded, named] = await Promise.all([readCoded(question), readNamed(question)])
+  const members = coded.looked ? await readMembers(coded.rows, question) : []
+  const known = new Set(coded.rows.map(({ id }) => id))
+  const observations = [...coded.rows, ...[...members, ...named].filter(({ id }) => !known.has(id) && known.add(id))]
+  const specimens = specimensOf([...coded.included, ...await readSpecimens(observations, coded.included, question)])
+  const readings = observations.flatMap(observation => mapLaboratory(observation, { ...question, specimens }))
+  return { rows: coded, readings: readings.sort(newestFirst) }
+}
+
+async function readCoded(question: LaboratoryQuestion): Promise<Rows<ObservationResource>> {
+  const creatinine = [...loincRefs([...creatinineLoinc, ...cystatinLoinc]), ...question.settings.creatinineCodes]
+  // A date without a zone is taken in the server's own: one day more, and the rest is left out on our side.
+  const date: SearchParams = question.since === null ? {} : { date: `ge${daysBefore(question.since, 1)}` }
+  const search = (filters: SearchParams) => readRows({
+    ...question,
+    resourceType: 'Observation',
+    forms: patientForms(question.patientId, filters, { ...date, _sort: '-date', _count: question.settings.limits.pageSize }),
+    parse: observationResource,
+    owner: ({ subject }) => subject,
+  })
+  const byCode = search({ code: tokenList([...creatinine, ...loincRefs(panelLoinc)]) })
+  const capabilities = await question.capabilities
+  if (!capabilities?.types.get('Observation')?.params.has('component-code')) return byCode
+  const [whole, inPanels] = await Promise.all([byCode, search({ 'component-code': tokenList(creatinine) })])
+  return joinRows(whole, inPanels)
+}
+
+/** Results that say creatinine by name only. Servers need not know this question: where they do not, nothing is lost. */
+async function readNamed({ session, settings, patientId }: LaboratoryQuestion): Promise<ObservationResource[]> {
+  try {
+    const answer = await session.search('Observation', [{ 'patient': patientId, 'code:text': 'creatinine', '_count': settings.limits.pageSize }], { maxPages: 3 })
+    return answer.resources.flatMap(resource => asObservation(resource) ?? []).filter(({ subject }) => namesPatient(subject, patientId, settings))
+  }
+  catch (error) {
+    if (error instanceof EhrUnavailable) return []
+    throw error
+  }
+}
+
+/** Parts of panels that no search brought. A panel with a creatinine already among its known parts needs none. */
+async function readMembers(observations: readonly ObservationResource[], { session, settings, patientId }: LaboratoryQuestion): Promise<ObservationResource[]> {
+  const known = new Set(observations.map(({ id }) => id))
+  const missing = new Set(observations.filter(isPanel).flatMap((panel) => {
+    const ids = panel.hasMember.flatMap(reference => localTarget(reference, settings) ?? []).filter(({ type }) => type === 'Observation').map(({ id }) => id)
+    return ids.some(id => known.has(id)) ? [] : ids
+  }))
+  const fetched = await fetchEach([...missing].map(id => ({ type: 'Observation', id })), session)
+  return fetched.flatMap(resource => asObservation(resource) ?? []).filter(({ subject }) => namesPatient(subject, patientId, settings))
+}
+
+/** Specimens of the newest results, so that urine under a serum code is noticed. */
+async function readSpecimens(observations: readonly ObservationResource[], included: readonly FhirJson[], question: LaboratoryQuestion): Promise<FhirJson[]> {
+  const known = specimensOf(included)
+  const wanted = new Set(observations
+    .filter(observation => mapLaboratory(observation, { ...question, specimens: known }).some(({ refusal }) => refusal === null))
+    .filter(observation => specimenOf(observation, known, question.settings) === null)
+    .sort((a, b) => (b.effectiveDateTime ?? '').localeCompare(a.effectiveDateTime ?? ''))
+    .flatMap(observation => localTarget(observation.specimen, question.settings) ?? [])
+    .filter(({ type }) => type === 'Specimen')
+    .map(({ id }) => id))
+  return fetchEach([...wanted].map(id => ({ type: 'Specimen', id })), question.session)
+}
+
+async function fetchEach(targets: ReadonlyArray<{ type: string, id: string }>, session: EhrSession): Promise<FhirJson[]> {
+  const answers = await Promise.all(targets.slice(0, mostFetched).map(async ({ type, id }) => {
+    try {
+      return [await session.read(type, id)]
+    }
+    catch (error) {
+      if (error instanceof EhrUnavailable) return []
+      throw error
+    }
+  }))
+  return answers.flat()
+}
+
+function newestFirst(a: LabReading, b: LabReading): number {
+  return (b.collectedAt ?? '').localeCompare(a.collectedAt ?? '') || (b.issuedAt ?? '').localeCompare(a.issuedAt ?? '')
+}
