@@ -20,6 +20,8 @@ export async function migrate({ ownerUrl, workerUrl, dir }) {
     await client.query('select pg_advisory_lock($1)', [migrationLock])
     await client.query('set lock_timeout = \'5s\'')
     await applyMigrations(drizzle(client), { migrationsFolder: dir })
+    // Each server reads how far the database is, to say whether it is ready.
+    await client.query('grant usage on schema drizzle to wherefore_app; grant select on drizzle.__drizzle_migrations to wherefore_app')
     await prepareQueue(workerUrl)
   }
   finally {

@@ -1,6 +1,7 @@
 import { z } from 'zod'
 import { roles } from '../domain/access/roles'
 import { auditActions } from '../domain/access/audit'
+import { leastPasswordLength } from '../domain/access/password'
 import { mailAddress, optionalText, pageQuery, requiredText } from './common'
 
 export const inviteSchema = z.strictObject({
@@ -29,8 +30,12 @@ export const practiceSchema = z.strictObject({
 
 export const preferencesSchema = z.strictObject({ shortcuts: z.boolean() })
 
-/** 15 characters at least, since it is the only factor; no rule on which ones. */
-export const passwordSchema = z.string().min(15, 'Use at least 15 characters; a few words in a row are fine.').max(200, 'At most 200 characters.')
+/** The random part of a link that a message carries: 256 bits in base64url. */
+export const secretParams = z.strictObject({ token: z.string().regex(/^[\w-]{22,86}$/) })
+
+/** At least as long as is needed where it is the only factor; no rule on which characters. The server also refuses easy ones. */
+export const passwordSchema = z.string()
+  .refine(value => [...value.normalize('NFKC')].length >= leastPasswordLength, `Use at least ${leastPasswordLength} characters; a few words in a row are fine.`).max(200, 'At most 200 characters.')
 
 export const acceptInvitationSchema = z.strictObject({ password: passwordSchema })
 

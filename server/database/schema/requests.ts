@@ -115,6 +115,8 @@ export const requests = pgTable('requests', {
   /** A practice's own list, newest first. */
   index('requests_practice_idx').on(table.practiceId, table.updatedAt.desc(), table.id.desc())
     .where(sql`${table.state} <> 'discarded'`),
+  /** What waits for a practice's answer: the badge of its people. */
+  index('requests_awaiting_idx').on(table.practiceId).where(sql`${table.awaiting} = 'ordering'`),
   /** The booking desk: by slot, unbooked first. */
   index('requests_preparation_idx').on(table.slotStartsAt, table.id)
     .where(sql`${table.state} in ('approved', 'booked', 'reopened', 'queried')`),
