@@ -1,7 +1,7 @@
 import { computed, onBeforeUnmount, onMounted, ref, watch } from 'vue'
 import type { Ref } from 'vue'
 import type { RequestRow, ReviewView } from '#shared/types/views'
-import type { ApiProblem } from '~/composables/use-api'
+import type { ApiProblem, ApiResult } from '~/composables/use-api'
 import { useApi } from '~/composables/use-api'
 
 export const reviewFilters = [
@@ -34,12 +34,15 @@ export function useReviewQueue(filter: Ref<ReviewFilter>) {
     // As many rows as were open before, so that the list keeps its place.
     const limit = Math.min(100, Math.max(50, rows.value.length))
     const result = await api.get<ReviewView>('/api/review', { filter: filter.value, limit })
-    problem.value = result.ok ? null : result.problem
-    if (result.ok) take(result.data)
+    take(result)
     return result
   }
 
-  function take(view: ReviewView) {
+  /** Takes a page that was read elsewhere, for instance while the page was built on the server. */
+  function take(result: ApiResult<ReviewView>) {
+    problem.value = result.ok ? null : result.problem
+    if (!result.ok) return
+    const view = result.data
     rows.value = view.rows
     next.value = view.next
     total.value = view.total

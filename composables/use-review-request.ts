@@ -12,27 +12,37 @@ export function useReviewRequest() {
   const request = ref<RequestView | null>(null)
   const problem = ref<ApiProblem | null>(null)
   const refused = ref<RefusedWrite | null>(null)
+  const reading = ref(false)
   const busy = ref<string | null>(null)
   let wanted: string | null = null
   const keys = new Map<string, string>()
 
-  async function open(key: string | null) {
+  async function open(key: string | null): Promise<ApiResult<RequestView> | null> {
     wanted = key
     refused.value = null
     if (key === null) {
       request.value = null
       problem.value = null
-      return
+      return null
     }
-    await read(key)
+    reading.value = true
+    return await read(key)
   }
 
   async function read(key: string) {
     const result = await api.get<RequestView>(`/api/requests/${encodeURIComponent(key)}`)
-    // Somebody moved on while this was on its way.
-    if (wanted !== key) return
-    problem.value = result.ok ? null : result.problem
-    if (result.ok) request.value = result.data
+    // Somebody may have moved on while this was on its way.
+    if (wanted === key) take(key, result)
+    return result
+  }
+
+  /** Takes a result that was read elsewhere, for instance while the page was built on the server. */
+  function take(key: string | null, result: ApiResult<RequestView> | null) {
+    wanted = key
+    reading.value = false
+    problem.value = result === null || result.ok ? null : result.problem
+    if (result?.ok) request.value = result.data
+    else if (result !== null && result.problem.status === 404) request.value = null
   }
 
   async function again() {
@@ -61,5 +71,5 @@ export function useReviewRequest() {
     return result
   }
 
-  return { request, problem, refused, busy, open, again, write }
+  return { request, problem, refused, reading, busy, open, take, again, write }
 }
