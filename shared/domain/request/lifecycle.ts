@@ -76,3 +76,8 @@ export function transition(
 
 /** Seconds in which the same radiologist may take a decision back; later only by reopening. */
 export const undoSeconds = 60
+
+/** Whether the state allows the transition at all, whoever asks. */
+export function isTransition(from: RequestState, name: TransitionName): boolean {
+  return transitions.some(row => row.name === name && (row.from as readonly RequestState[]).includes(from))
+}
