@@ -5,6 +5,7 @@ import type { ClinicalQuestion, Decider } from '../guidance/types'
 import type { KidneyFunction } from '../kidney/types'
 import type { ScreeningAnswers } from '../safety/types'
 import { isIntravenous, outcomeWords, usesContrast } from '../contrast/outcome'
+import { answerLabel, decidedValues } from '../guidance/deciders'
 import { pregnancyAsked } from '../safety/pregnancy'
 import { judge } from './judge'
 import { listed, needWords, windowWords } from './words'
@@ -55,25 +56,32 @@ function effectOf(base: Judgement, other: Judgement): { leadsTo: Clause['leadsTo
     }
   }
   if (base.suggestion === null || other.suggestion === null) return null
+  const words = preparationEffect(base, other)
+  return words === '' ? null : { leadsTo: null, words: `then ${words}` }
+}
+
+/** What changes around an unchanged outcome, weightiest first. */
+function preparationEffect(base: Judgement, other: Judgement): string {
   const had = new Set(base.needs.map(need => need.kind))
   const has = new Set(other.needs.map(need => need.kind))
-  const added = [...has].filter(kind => !had.has(kind)).map(kind => needWords[kind])
-  const dropped = [...had].filter(kind => !has.has(kind)).map(kind => needWords[kind])
+  // The radiologist's word is said as waiting, not as one more need.
+  const added = [...has].filter(kind => !had.has(kind) && kind !== 'radiologist-word').map(kind => needWords[kind])
+  const dropped = [...had].filter(kind => !has.has(kind) && kind !== 'radiologist-word').map(kind => needWords[kind])
   const best = other.agents?.ranked.find(entry => entry.agent === other.agents?.best)
-  if (other.asksRadiologist && !base.asksRadiologist) {
-    const rest = added.filter(words => words !== needWords['radiologist-word'])
-    return { leadsTo: null, words: `then contrast waits for a radiologist's word${rest.length > 0 ? `, and ${listed(rest)} ${rest.length === 1 ? 'is' : 'are'} needed` : ''}` }
+  const words: string[] = []
+  if (other.asksRadiologist !== base.asksRadiologist) {
+    words.push(other.asksRadiologist ? 'contrast waits for a radiologist\'s word' : 'contrast no longer waits for a radiologist\'s word')
   }
-  if (added.length > 0) return { leadsTo: null, words: `then ${listed(added)} ${added.length === 1 ? 'is' : 'are'} needed` }
-  if (best && base.agents && best.agent !== base.agents.best) return { leadsTo: null, words: `then another agent is suggested: ${best.name}` }
-  if (dropped.length > 0) return { leadsTo: null, words: `then ${listed(dropped)} ${dropped.length === 1 ? 'is' : 'are'} no longer needed` }
-  return null
+  if (added.length > 0) words.push(`${listed(added)} ${added.length === 1 ? 'is' : 'are'} needed`)
+  if (dropped.length > 0) words.push(`${listed(dropped)} ${dropped.length === 1 ? 'is' : 'are'} no longer needed`)
+  if (best && base.agents && best.agent !== base.agents.best) words.push(`${best.name} is suggested instead`)
+  return words.join('; ')
 }
 
 function deciderChanges(inputs: AssessmentInputs, rules: AssessmentRules, base: Judgement, question: ClinicalQuestion): Change[] {
   const relevant = base.guidance?.status === 'needs-answers' ? base.guidance.deciders : question.deciders.map(decider => decider.id)
   return question.deciders.filter(decider => relevant.includes(decider.id)).flatMap((decider, index) =>
-    valuesOf(decider).filter(value => value !== inputs.answers[decider.id]).map(value => ({
+    decidedValues(decider).filter(value => value !== inputs.answers[decider.id]).map(value => ({
       fact: deciderFact(decider, value),
       flips: decider.id,
       weight: 60 - index,
@@ -81,14 +89,8 @@ function deciderChanges(inputs: AssessmentInputs, rules: AssessmentRules, base: 
     })))
 }
 
-function valuesOf(decider: Decider): string[] {
-  return decider.kind === 'yesno' ? ['yes', 'no'] : decider.options.map(option => option.id)
-}
-
 function deciderFact(decider: Decider, value: string): string {
-  const ask = decider.ask.replace(/[?.:]\s*$/, '')
-  if (decider.kind === 'yesno') return `${value === 'yes' ? 'Yes' : 'No'} to “${ask}”`
-  return `“${ask}” is answered “${decider.options.find(option => option.id === value)?.label ?? value}”`
+  return `“${decider.ask}” is answered “${answerLabel(decider, value)}”`
 }
 
 interface Flip { field: keyof ScreeningAnswers, weight: number, to: Partial<ScreeningAnswers>, fact: string }
@@ -149,7 +151,7 @@ function thresholdChanges(inputs: AssessmentInputs, rules: AssessmentRules, base
   const latest = lastAcceptedDay(kidney, rules.policy.department.timeZone)
   if (latest !== null && latest.diff(DateTime.fromISO(inputs.now), 'days').days <= reachDays) {
     changes.push({
-      fact: `The exam is later than ${latest.toFormat('d LLLL')}, ${windowWords(kidney.windowDays ?? 0)} after the creatinine`, flips: 'plannedAt', weight: 44,
+      fact: `The exam is later than ${latest.setLocale('en-US').toFormat('LLLL d')}, ${windowWords(kidney.windowDays ?? 0)} after the creatinine`, flips: 'plannedAt', weight: 44,
       result: judge({ ...inputs, plannedAt: latest.plus({ days: 1, hours: 1 }).toUTC().toISO() }, rules),
     })
   }

@@ -168,7 +168,8 @@ export function composeNeutral(policy: Policy): NeutralMessage {
     paragraphs: [
       `${name} has a message for you.`,
       'Open it with the link below. We will ask for your date of birth.',
-      `If you did not expect this, or the link does not work, call us at ${phone}.`,
+      `If you did not expect this, call us at ${phone}.`,
+      'Call us too if the link does not work.',
     ],
     caution,
   }

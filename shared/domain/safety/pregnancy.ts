@@ -61,7 +61,7 @@ export function findPregnancy(context: SafetyContext): SafetyFinding[] {
       ? 'Whether the patient is pregnant is not known: contrast waits for an answer, or for a radiologist.'
       : 'The pregnancy question has no answer yet.',
     plain: 'We need to know if you may be pregnant.',
-    addsNeeds: ['pregnancy-answer'], asksRadiologist: answer === 'unknown',
+    addsNeeds: answer === 'unknown' ? ['pregnancy-answer', 'radiologist-word'] : ['pregnancy-answer'], asksRadiologist: answer === 'unknown',
     source: safetySources.acogPregnancy,
   })]
 }

@@ -1,4 +1,5 @@
 import { describe, expect, it } from 'vitest'
+import { countText, fleschKincaidGrade, readingGradeCeiling } from '#shared/domain/letter/readability'
 import { findSafety } from '#shared/domain/safety/index'
 import type { Situation } from './situation'
 import { situation } from './situation'
@@ -56,7 +57,7 @@ const tables: Record<string, Row[]> = {
   pregnancy: [
     { when: 'pregnant', given: { patient: woman, screening: { pregnancy: 'yes' } }, ids: ['pregnancy-yes'], turns: 'discuss', asks: true },
     { when: 'possibly pregnant', given: { patient: woman, screening: { pregnancy: 'possible' } }, ids: ['pregnancy-possible'], needs: ['pregnancy-answer', 'radiologist-word'], turns: null },
-    { when: 'not known', given: { patient: woman, screening: { pregnancy: 'unknown' } }, ids: ['pregnancy-open'], needs: ['pregnancy-answer'], asks: true },
+    { when: 'not known', given: { patient: woman, screening: { pregnancy: 'unknown' } }, ids: ['pregnancy-open'], needs: ['pregnancy-answer', 'radiologist-word'], asks: true },
     { when: 'not asked yet', given: { patient: woman, screening: { pregnancy: null } }, ids: ['pregnancy-open'], needs: ['pregnancy-answer'], asks: false },
     { when: 'marked not applicable though it applies', given: { patient: woman, screening: { pregnancy: 'not-applicable' } }, ids: ['pregnancy-open'] },
     { when: 'not pregnant', given: { patient: woman, screening: { pregnancy: 'no' } }, ids: [] },
@@ -127,6 +128,14 @@ for (const [topic, rows] of Object.entries(tables)) {
 }
 
 describe('safety findings', () => {
+  it('speak to the patient at grade 8 or below, in short sentences', () => {
+    const all = Object.values(tables).flat().flatMap(row => findSafety(situation(row.given)))
+    for (const { id, plain } of all) {
+      expect(fleschKincaidGrade(plain), id).toBeLessThanOrEqual(readingGradeCeiling)
+      for (const sentence of plain.split(/(?<=\.)\s+/)) expect(countText(sentence).words, id).toBeLessThanOrEqual(20)
+    }
+  })
+
   it('stand gravest first', () => {
     const found = findSafety(situation({ screening: { nephrogenicSystemicFibrosis: 'yes', asthma: 'yes', breastfeeding: 'yes' }, kidney: { gateEgfr: 20 } }))
     expect(found.map(item => item.severity)).toEqual(['stop', 'hold', 'caution', 'info'])

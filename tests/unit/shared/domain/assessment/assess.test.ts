@@ -1,0 +1,127 @@
+import { describe, expect, it } from 'vitest'
+import { assess, assessDecision } from '#shared/domain/assessment/assess'
+import { emptyScreening } from '#shared/domain/safety/screening'
+import { quietScreening } from '../safety/situation'
+import { creatinine, marta, rules } from './request-inputs'
+
+const texts = (clauses: { text: string }[]) => clauses.map(clause => clause.text).join('\n')
+
+describe('an assessment', () => {
+  it('leads with a sentence: exam, contrast and reason', () => {
+    expect(assess(marta, rules).sentence).toMatch(/^MRI brain, seizure protocol, without and with contrast, because a first seizure/)
+  })
+
+  it('says what is needed and what is not', () => {
+    const { needs, provided } = assess(marta, rules)
+    expect(needs.map(need => need.kind)).toEqual(['iv-start', 'medication-guide'])
+    expect(texts(provided)).toContain('No new lab work: the creatinine is inside the 6-week window')
+    expect(provided.find(clause => clause.text.startsWith('An IV start'))?.owner).toBe('scheduler')
+  })
+
+  it('names the source of its main reason', () => {
+    expect(assess(marta, rules).because[0]?.source?.body).toBe('American College of Radiology')
+  })
+
+  it('keeps the versions it was made with', () => {
+    expect(assess(marta, rules)).toMatchObject({ guidanceVersion: '2026.1', policyVersion: '2026.1', assessedAt: marta.now })
+  })
+
+  it('works before a question is chosen and shows kidney function already', () => {
+    const first = assess({ ...marta, questionId: null, answers: {}, screening: emptyScreening }, rules)
+    expect(first).toMatchObject({ exam: null, guidance: null, suggestion: null, agents: null, needs: [], unless: [] })
+    expect(first.kidney.egfr?.display).toBe('69')
+    expect(first.sentence).toMatch(/^Choose the clinical question/)
+  })
+
+  it('says which answer decides while one is open, and where each would lead', () => {
+    const open = assess({ ...marta, answers: {} }, rules)
+    expect(open.sentence).toMatch(/one answer decides$/)
+    expect(open.unless.map(clause => clause.leadsTo)).toEqual(['iv-with-and-without', 'none'])
+  })
+
+  it('lets nothing about contrast through where none is given', () => {
+    const without = assess({ ...marta, answers: { tumorInfection: 'no' }, readings: [], patient: { ...marta.patient, weightKg: null } }, rules)
+    expect(without.suggestion).toBe('none')
+    expect(without.needs).toEqual([])
+    expect(texts(without.provided)).toContain('No IV start and no lab work')
+  })
+
+  it('keeps the suggestion and asks for a radiologist below an eGFR of 30', () => {
+    const low = assess({ ...marta, readings: [creatinine(2.4, '2026-11-30T14:00:00Z')] }, rules)
+    expect(low.kidney.gateEgfr).toBeLessThan(30)
+    expect(low).toMatchObject({ suggestion: 'iv-with-and-without', asksRadiologist: true })
+    expect(low.needs.map(need => need.kind)).toContain('radiologist-word')
+    expect(texts(low.because)).toMatch(/below 30/)
+  })
+
+  it('turns to a talk with the radiologist in pregnancy and still names the agent that would be used', () => {
+    const pregnant = assess({ ...marta, patient: { ...marta.patient, birthDate: '1992-05-20' }, screening: { ...quietScreening, pregnancy: 'yes' } }, rules)
+    expect(pregnant.suggestion).toBe('discuss')
+    expect(pregnant.sentence).toMatch(/to be discussed with a radiologist, because pregnancy holds contrast back$/)
+    expect(pregnant.agents?.best).toBe('gadobutrol')
+    expect(pregnant.plain.why).toMatch(/pregnant/)
+    expect(pregnant.needs.map(need => need.kind)).not.toContain('iv-start')
+  })
+
+  it('leaves contrast out with known nephrogenic systemic fibrosis and suggests no agent', () => {
+    const known = assess({ ...marta, screening: { ...quietScreening, nephrogenicSystemicFibrosis: 'yes' } }, rules)
+    expect(known).toMatchObject({ suggestion: 'none', agents: null, asksRadiologist: true })
+    expect(known.alternatives).toMatch(/\S/)
+  })
+
+  it('suggests another agent after a reaction to the first', () => {
+    const reacted = assess({ ...marta, screening: { ...quietScreening, earlierReaction: 'yes', reactionKind: 'allergic-like', reactionSeverity: 'mild', reactionAgent: 'gadobutrol' } }, rules)
+    expect(reacted.agents?.best).toBe('gadoterate')
+    expect(reacted.agents?.ranked.find(entry => entry.agent === 'gadobutrol')?.reasons).toContain('An earlier reaction to it')
+  })
+
+  it('never blocks a stat exam: a word stands in for the creatinine', () => {
+    const stat = assess({ ...marta, priority: 'stat', readings: [] }, rules)
+    expect(stat).toMatchObject({ suggestion: 'iv-with-and-without', asksRadiologist: true })
+    expect(stat.needs.map(need => need.kind)).toEqual(expect.arrayContaining(['creatinine', 'radiologist-word']))
+  })
+
+  it('says that a record could not be read and never that nothing is in it', () => {
+    const blind = assess({ ...marta, readings: [], record: { state: 'unreachable', readAt: null } }, rules)
+    expect(blind.kidney.status).toBe('could-not-look')
+    expect(texts(blind.because)).toMatch(/could not be read/)
+  })
+})
+
+describe('needs after the radiologist has chosen', () => {
+  it('follow the choice, and the word is given', () => {
+    const low = { ...marta, readings: [creatinine(2.4, '2026-11-30T14:00:00Z')] }
+    const signed = assessDecision(low, rules, { contrast: 'iv-with-and-without', agent: 'gadoterate' })
+    expect(signed.needs.map(need => need.kind)).toEqual(['iv-start', 'medication-guide'])
+    expect(assessDecision(low, rules, { contrast: 'none', agent: null }).needs).toEqual([])
+  })
+
+  it('ask no Medication Guide of an agent the patient had here before', () => {
+    const exposures = [{ id: 'l1', agent: 'gadobutrol' as const, agentText: 'gadobutrol', givenAt: '2025-02-01T10:00:00Z', amountMmol: 7.4, source: 'ledger' as const }]
+    const kinds = (agent: 'gadobutrol' | 'gadoterate') => assessDecision({ ...marta, exposures }, rules, { contrast: 'iv-with-and-without', agent }).needs.map(need => need.kind)
+    expect(kinds('gadobutrol')).toEqual(['iv-start'])
+    expect(kinds('gadoterate')).toEqual(['iv-start', 'medication-guide'])
+  })
+})
+
+describe('due times', () => {
+  const planned = { ...marta, plannedAt: '2026-12-03T15:00:00Z', readings: [], screening: { ...quietScreening, kidneyDisease: 'yes' as const, earlierReaction: 'yes' as const, reactionSeverity: 'moderate' as const } }
+  const due = (kind: string) => assess(planned, rules).needs.find(need => need.kind === kind)?.dueAt
+
+  it('count back from the planned start', () => {
+    expect(due('creatinine')).toBe('2026-12-02T15:00:00Z')
+    expect(due('premedication')).toBe('2026-12-03T02:00:00Z')
+    expect(due('iv-start')).toBe('2026-12-03T15:00:00Z')
+  })
+
+  it('are open while no slot is set', () => {
+    expect(assess({ ...planned, plannedAt: null }, rules).needs.every(need => need.dueAt === null)).toBe(true)
+  })
+
+  it('put dialysis after the exam', () => {
+    const onDialysis = assess({ ...marta, plannedAt: '2026-12-03T15:00:00Z', screening: { ...quietScreening, dialysis: 'hemodialysis' } }, rules)
+    expect(onDialysis.needs.find(need => need.kind === 'dialysis-after')?.dueAt).toBe('2026-12-04T15:00:00Z')
+    expect(onDialysis.needs.find(need => need.kind === 'iv-start')?.text).toMatch(/not in the fistula arm/)
+    expect(onDialysis.kidney.egfr).toBeNull()
+  })
+})
