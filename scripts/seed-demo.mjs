@@ -1,0 +1,32 @@
+/**
+ * Fills an empty, migrated database with the demonstration department; one that has it already is left alone. Runs from the
+ * sources, without a build.
+ *
+ *   NUXT_DEMO=on NUXT_DATABASE_URL=postgres://… node scripts/seed-demo.mjs
+ *
+ * Prints one line on what was done, then the demo sign-ins.
+ */
+import { join } from 'node:path'
+import { describeSignIns, demoUsers } from '../server/database/seed/demo-users.mjs'
+import { loadSources } from './lib/load-sources.mjs'
+import { root } from './lib/paths.mjs'
+
+const url = process.env.NUXT_DATABASE_URL
+if (!url || process.env.NUXT_DEMO !== 'on') {
+  console.error('NUXT_DATABASE_URL must name the database, and NUXT_DEMO must be "on": demo accounts share one published pass phrase.')
+  process.exit(1)
+}
+
+const sources = await loadSources()
+let handle = null
+try {
+  const { openDatabase } = await sources.load(join(root, 'server', 'database', 'client.ts'))
+  const { seedDepartment } = await sources.load(join(root, 'server', 'database', 'seed', 'seed-department.ts'))
+  handle = openDatabase(url, (error) => console.error(error.message))
+  const made = await seedDepartment(handle.db)
+  console.log(made ? `made: Northshore Imaging with ${demoUsers.length} people` : 'there already')
+  console.log(describeSignIns())
+} finally {
+  await handle?.pool.end()
+  await sources.close()
+}
