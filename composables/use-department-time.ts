@@ -1,7 +1,8 @@
 import type { ComputedRef, Ref } from 'vue'
 import { computed } from 'vue'
+import { ageWords } from '#shared/domain/record/age-words'
 import {
-  ageInWords, birthDateWords, clockWords, dateWords, dayWords, dueWords, exactWords, momentWords, relativeWords,
+  birthDateWords, clockWords, dateWords, dayWords, dueWords, exactWords, momentWords, relativeWords,
 } from '#shared/utils/time-words'
 import { useNow } from '~/composables/use-now'
 import { useSessionStore } from '~/stores/session'
@@ -27,7 +28,7 @@ export interface DepartmentTime {
   /** "4 Mar 1965" */
   birthDate: (birthDate: string | null) => string
   /** "61 years" */
-  age: (birthDate: string | null) => string | null
+  age: (birthDate: string) => string
 }
 
 /** Every time on a screen, in the department's zone. */
@@ -46,6 +47,6 @@ export function useDepartmentTime(): DepartmentTime {
     relative: iso => relativeWords(iso, now.value),
     due: iso => dueWords(iso, timeZone.value, now.value),
     birthDate: birthDateWords,
-    age: birthDate => ageInWords(birthDate, now.value, timeZone.value),
+    age: birthDate => ageWords(birthDate, now.value, timeZone.value),
   }
 }

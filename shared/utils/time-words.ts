@@ -63,20 +63,3 @@ export function birthDateWords(birthDate: string | null): string {
   if (!date.isValid) return birthDate
   return date.toFormat(birthDate.length === 10 ? 'd LLL yyyy' : birthDate.length === 7 ? 'LLL yyyy' : 'yyyy')
 }
-
-/**
- * Age at a moment as clinicians say it: "61 years", "7 months" below 2 years, "12 days" below a month. Null where the
- * date says too little or lies ahead.
- */
-export function ageInWords(birthDate: string | null, now: string, zone: string): string | null {
-  if (!birthDate) return null
-  const born = DateTime.fromISO(birthDate, { zone })
-  const age = at(now, zone).startOf('day').diff(born, ['years', 'months', 'days'])
-  if (!born.isValid || age.as('days') < 0) return null
-  if (birthDate.length < 10) return `about ${Math.round(age.as('years'))} years`
-  const months = age.years * 12 + age.months
-  if (age.years >= 2) return `${age.years} years`
-  if (months >= 1) return `${months} month${months === 1 ? '' : 's'}`
-  const days = Math.floor(age.days)
-  return `${days} day${days === 1 ? '' : 's'}`
-}
