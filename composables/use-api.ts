@@ -22,7 +22,8 @@ export interface WriteOptions {
 }
 
 export interface Api {
-  get: <T>(path: string, query?: Record<string, string | number | undefined>) => Promise<ApiResult<T>>
+  /** A `background` call, such as polling, does not count as something the person did: the session may end for idleness. */
+  get: <T>(path: string, query?: Record<string, string | number | undefined>, options?: { background?: boolean }) => Promise<ApiResult<T>>
   post: <T>(path: string, body: object, options?: WriteOptions) => Promise<ApiResult<T>>
   put: <T>(path: string, body: object, options?: WriteOptions) => Promise<ApiResult<T>>
 }
@@ -34,18 +35,20 @@ export function newWriteKey(): string {
 
 /** Calls the server's routes; on the server it passes the visitor's cookie on. Never throws. */
 export function useApi(): Api {
-  const call = useRequestFetch()
+  // While rendering on the server the visitor's cookie and the visit's id go along; in the browser this is empty.
+  const visitor = useRequestHeaders(['cookie', 'x-request-id'])
 
   async function send<T>(method: 'GET' | 'POST' | 'PUT', path: string, options: {
     body?: object
     query?: Record<string, string | number | undefined>
     write?: WriteOptions
+    background?: boolean
   }): Promise<ApiResult<T>> {
-    const headers: Record<string, string> = {}
+    const headers: Record<string, string> = { ...visitor, ...(options.background ? { 'x-wherefore-background': '1' } : {}) }
     if (options.write?.version !== undefined) headers['if-match'] = `"${options.write.version}"`
     if (method === 'POST') headers['idempotency-key'] = options.write?.key ?? newWriteKey()
     try {
-      const response = await call.raw<T>(path, { method, headers, body: options.body, query: options.query, retry: false })
+      const response = await $fetch.raw<T>(path, { method, headers, body: options.body, query: options.query, retry: false })
       const tag = /^"(\d+)"$/.exec(response.headers.get('etag') ?? '')
       return { ok: true, data: response._data as T, version: tag?.[1] ? Number(tag[1]) : null }
     }
@@ -55,7 +58,7 @@ export function useApi(): Api {
   }
 
   return {
-    get: (path, query) => send('GET', path, { query }),
+    get: (path, query, options) => send('GET', path, { query, ...options }),
     post: (path, body, write) => send('POST', path, { body, write }),
     put: (path, body, write) => send('PUT', path, { body, write }),
   }

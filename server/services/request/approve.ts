@@ -22,6 +22,7 @@ import { earlierAnswer } from '../transaction'
 import { gatherInputs, runAssessment, storeAssessment } from './assess-request'
 import type { Assessed } from './assess-request'
 import { changeRequest } from './change'
+import type { ChangeOutcome } from './change'
 import { loadRequest } from './load'
 import type { LoadedRequest } from './load'
 import { currentAssessment } from './stored'
@@ -49,7 +50,7 @@ export async function approveRequest({ ctx, input }: { ctx: ServiceContext, inpu
     version: input.version,
     action: 'request.approve',
     step: null,
-    apply: async (tx, { request, patient }) => {
+    apply: async (tx, { request, patient }): Promise<ChangeOutcome> => {
       const inputs = await gatherInputs(tx, ctx.now, { form: request.form, record, patient, plannedAt: request.slotStartsAt })
       const fresh = runAssessment(inputs, inForce)
       const seen = await currentAssessment(tx, request)

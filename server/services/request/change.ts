@@ -18,7 +18,7 @@ import type { LoadedRequest } from './load'
 
 type RequestUpdate = Partial<typeof requests.$inferInsert>
 
-interface Outcome {
+export interface ChangeOutcome {
   set?: RequestUpdate
   audit: AuditAction
   detail?: AuditEntry['detail']
@@ -32,7 +32,7 @@ interface Change {
   /** The transition it takes; null where the state stays. May depend on the row. */
   step: TransitionName | null | ((loaded: LoadedRequest) => TransitionName | null)
   keepsSlot?: (loaded: LoadedRequest) => boolean
-  apply: (tx: Database, loaded: LoadedRequest) => Promise<Outcome>
+  apply: (tx: Database, loaded: LoadedRequest) => Promise<ChangeOutcome>
 }
 
 /**

@@ -5,7 +5,7 @@ import { rulesInForce } from './in-force'
 /** The guidance in force with its signature. */
 export async function viewGuidance({ ctx }: { ctx: ServiceContext }): Promise<GuidanceView> {
   const { rules, guidance } = await rulesInForce(ctx.db, ctx.now)
-  return { ...rules.guidance, signedBy: guidance.signedBy, effectiveFrom: guidance.effectiveFrom.toISOString() }
+  return { guidance: rules.guidance, version: rules.guidance.version, signedBy: guidance.signedBy, effectiveFrom: guidance.effectiveFrom.toISOString() }
 }
 
 /** The policy in force with its signature. */
