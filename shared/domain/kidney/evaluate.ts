@@ -2,11 +2,10 @@ import { DateTime } from 'luxon'
 import type { Policy } from '../policy/types'
 import type { Priority } from '../request/priority'
 import { ageAt, sampleAgeWords } from './age'
-import type { AgeRange } from './age'
 import { chooseCreatinine, chooseCystatinC } from './creatinine'
-import type { CreatinineChoice, CreatininePoint } from './creatinine'
+import type { CreatinineChoice } from './creatinine'
 import { estimateGfr } from './equation-choice'
-import type { EstimateOutcome } from './equation-choice'
+import type { EstimateInput } from './equation-choice'
 import { kidneyHeadline } from './headline'
 import { assessInjury, isAcute } from './injury'
 import { requireInstant } from './instant'
@@ -45,14 +44,8 @@ function usableHeight({ patient, now }: KidneyInput): { cm: number, dated: boole
   return measured.plus({ years: 1 }) >= DateTime.fromMillis(requireInstant(now), { zone: 'utc' }) ? { cm: patient.heightCm, dated: true } : null
 }
 
-function estimateAt(
-  input: KidneyInput, point: CreatininePoint, ages: AgeRange | null, cystatinC: { mgPerL: number, comparator: LabReading['comparator'] } | null,
-): EstimateOutcome {
-  return estimateGfr({
-    creatinine: point, cystatinC, ages, sex: input.patient.sex, heightCm: usableHeight(input)?.cm ?? null,
-    gates: [input.policy.holdBelowEgfr.value],
-  })
-}
+/** What the estimates of one patient have in common, whichever sample they are made from. */
+type Common = Pick<EstimateInput, 'sex' | 'heightCm' | 'gates'>
 
 /** Missing, not looked for and not readable are three states; they are never merged. */
 function statusWithoutCreatinine(state: KidneyInput['record']['state']): KidneyStatus {
@@ -61,10 +54,11 @@ function statusWithoutCreatinine(state: KidneyInput['record']['state']): KidneyS
 }
 
 /** The trend: each usable creatinine with its eGFR from creatinine alone, so that all points are comparable. */
-function trend(input: KidneyInput, choice: CreatinineChoice, onDialysis: boolean): KidneyFunction['series'] {
+function trend({ patient, policy }: KidneyInput, common: Common, choice: CreatinineChoice, onDialysis: boolean): KidneyFunction['series'] {
   return choice.series.map((point) => {
-    const ages = ageAt(input.patient.birthDate, point.atMs, input.policy.department.timeZone)
-    const outcome = onDialysis ? null : estimateAt(input, point, ages, null)
+    const outcome = onDialysis
+      ? null
+      : estimateGfr({ ...common, creatinine: point, cystatinC: null, ages: ageAt(patient.birthDate, point.atMs, policy.department.timeZone) })
     return {
       collectedAt: point.collectedAt, mgPerDl: point.mgPerDl, comparator: point.comparator,
       egfr: outcome?.status === 'estimated' ? outcome.egfr.value : null,
@@ -95,9 +89,10 @@ export function evaluateKidney(input: KidneyInput): KidneyFunction {
   const agesAtSample = newest === null ? null : ageAt(patient.birthDate, newest.atMs, timeZone)
   const agesAtExam = ageAt(patient.birthDate, examMs, timeZone)
   const height = usableHeight(input)
+  const common: Common = { sex: patient.sex, heightCm: height?.cm ?? null, gates: [policy.holdBelowEgfr.value] }
   const outcome = newest === null || onDialysis
     ? null
-    : estimateAt(input, newest, agesAtSample, cystatinC.mgPerL === null ? null : cystatinC)
+    : estimateGfr({ ...common, creatinine: newest, cystatinC: cystatinC.mgPerL === null ? null : cystatinC, ages: agesAtSample })
 
   const injury = assessInjury({
     series: choice.series, ageYears: agesAtSample?.youngest.decimalYears ?? null, heightCm: height?.cm ?? null,
@@ -135,7 +130,7 @@ export function evaluateKidney(input: KidneyInput): KidneyFunction {
       birthDateExact: agesAtSample?.exact ?? true,
       childHeight: egfr?.equation === 'ckid-u25-cr' || range?.low.equation === 'ckid-u25-cr' ? height : null,
     }),
-    series: trend(input, choice, onDialysis),
+    series: trend(input, common, choice, onDialysis),
   }
 }
 

@@ -59,11 +59,19 @@ function stage3Routes(umolPerL: number, input: InjuryInput): string[] {
   return rules
 }
 
+/** The points of the seven days before one, so that a long record is not walked again for each of its points. */
+function weekBefore(points: readonly InjuryPoint[], index: number): InjuryPoint[] {
+  const atMs = points[index]?.atMs ?? 0
+  let first = index
+  while (first > 0 && atMs - (points[first - 1]?.atMs ?? 0) <= 7 * dayMs) first -= 1
+  return points.slice(first, index)
+}
+
 /** KDIGO definition and stage of one point against those before it. */
 function judgePoint(points: readonly InjuryPoint[], index: number, input: InjuryInput): { stage: Stage, rules: string[] } {
   const point = points[index]
   if (point === undefined) return { stage: 0, rules: [] }
-  const week = points.slice(0, index).filter(earlier => point.atMs - earlier.atMs <= 7 * dayMs)
+  const week = weekBefore(points, index)
   const rose = week.some(earlier => point.atMs - earlier.atMs <= 48 * hourMs && reaches(point.umolPerL - earlier.umolPerL, stepUmolPerL))
   const ratio = week.length === 0 ? 1 : point.umolPerL / Math.min(...week.map(earlier => earlier.umolPerL))
   const rules: string[] = []
@@ -78,11 +86,10 @@ function judgePoint(points: readonly InjuryPoint[], index: number, input: Injury
 
 /** Whether creatinine moved, up or down, in the week before the last value. A fall can hide a GFR that was far lower. */
 function isUnsteady(points: readonly InjuryPoint[], lastMs: number): boolean {
-  return points.some((later, index) => lastMs - later.atMs <= 7 * dayMs && points.slice(0, index).some((earlier) => {
-    const apart = later.atMs - earlier.atMs
+  return points.some((later, index) => lastMs - later.atMs <= 7 * dayMs && weekBefore(points, index).some((earlier) => {
     const high = Math.max(later.umolPerL, earlier.umolPerL)
     const low = Math.min(later.umolPerL, earlier.umolPerL)
-    return (apart <= 48 * hourMs && reaches(high - low, stepUmolPerL)) || (apart <= 7 * dayMs && reaches(high / low, 1.5))
+    return reaches(high / low, 1.5) || (later.atMs - earlier.atMs <= 48 * hourMs && reaches(high - low, stepUmolPerL))
   }))
 }
 
