@@ -6,7 +6,9 @@ import type { LabReading } from '#shared/domain/kidney/types'
 import type { GadoliniumExposure, ScreeningAnswers } from '#shared/domain/safety/types'
 
 /** The moment every case is judged at. */
-const now = DateTime.fromISO('2026-12-01T15:00:00Z', { zone: 'utc' })
+const now = DateTime.utc(2026, 12, 1, 15)
+
+const iso = (at: DateTime) => at.toJSDate().toISOString()
 
 const lab = z.array(z.object({ value: z.number(), unit: z.string(), daysAgo: z.number() }))
 const words = z.union([z.string(), z.number(), z.boolean()]).nullable()
@@ -49,7 +51,7 @@ export type Vignette = z.infer<typeof vignetteSchema>
 
 function readings(list: z.infer<typeof lab> | null | undefined, analyte: LabReading['analyte']): LabReading[] {
   return (list ?? []).map(({ value, unit, daysAgo }, index) => {
-    const at = now.minus({ milliseconds: Math.round(daysAgo * 86_400_000) }).toISO()
+    const at = iso(now.minus({ milliseconds: Math.round(daysAgo * 86_400_000) }))
     return {
       id: `${analyte}-${index}`, analyte, source: 'record', sourceLabel: 'Laboratory', value, comparator: null, unit,
       collectedAt: at, collectedText: at, precision: 'instant', issuedAt: at, status: 'final', refusal: null,
@@ -60,7 +62,7 @@ function readings(list: z.infer<typeof lab> | null | undefined, analyte: LabRead
 /** The birth date that makes the person the stated age when the newest sample was drawn, or now without one. */
 function birthDate({ age, context }: Vignette): string {
   const newest = Math.min(...(context.creatinine ?? []).map(entry => entry.daysAgo), ...(context.creatinine?.length ? [] : [0]))
-  return now.minus({ days: newest + 1 }).minus({ milliseconds: Math.round((age % 1) * 365.25 * 86_400_000) }).minus({ years: Math.floor(age) }).toISODate()
+  return iso(now.minus({ days: newest + 1 }).minus({ milliseconds: Math.round((age % 1) * 365.25 * 86_400_000) }).minus({ years: Math.floor(age) })).slice(0, 10)
 }
 
 function kidneyAnswers(text: string): Partial<ScreeningAnswers> | null {
@@ -101,7 +103,7 @@ function exposures({ priorGadolinium, priorAgentType, priorGadoliniumHoursAgo }:
     : null
   return Array.from({ length: Math.min(count, 50) }, (_, index) => ({
     id: `dose-${index}`, agent, agentText: String(priorAgentType ?? ''), amountMmol: null, source: 'record',
-    givenAt: now.minus({ hours: (hours ?? 24 * 365) + index * 24 * 180 }).toUTC().toISO(),
+    givenAt: iso(now.minus({ hours: (hours ?? 24 * 365) + index * 24 * 180 })),
   }))
 }
 
@@ -118,8 +120,8 @@ export function inputsOf(vignette: Vignette): { inputs: AssessmentInputs, notUnd
   }
   const female = vignette.sex === 'F'
   const inputs: AssessmentInputs = {
-    now: now.toISO(),
-    plannedAt: context.slotInDays == null ? null : now.plus({ milliseconds: Math.round(context.slotInDays * 86_400_000) }).toISO(),
+    now: iso(now),
+    plannedAt: context.slotInDays == null ? null : iso(now.plus({ milliseconds: Math.round(context.slotInDays * 86_400_000) })),
     questionId: vignette.questionId,
     answers: vignette.answers,
     priority: 'routine',
@@ -129,7 +131,7 @@ export function inputsOf(vignette: Vignette): { inputs: AssessmentInputs, notUnd
       weightKg: context.weightKg ?? (vignette.age >= 18 ? 75 : null), weightAt: null, heightCm: context.heightCm ?? null, heightAt: null,
     },
     readings: [...readings(context.creatinine, 'creatinine'), ...readings(context.cystatinC, 'cystatin-c')],
-    record: { state: 'complete', readAt: now.toISO() },
+    record: { state: 'complete', readAt: iso(now) },
     screening: {
       kidneyDisease: 'no', kidneyRiskFactor: 'no', dialysis: 'none', nextDialysisAt: null, acuteIllness: 'no', liverDisease: 'no',
       earlierReaction: 'no', reactionAgent: null, reactionKind: null, reactionSeverity: null, asthma: 'no', pregnancy: 'no',

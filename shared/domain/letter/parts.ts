@@ -6,6 +6,7 @@ import type { DecidableOutcome } from '../contrast/outcome'
 import type { Policy } from '../policy/types'
 import { plainNeed } from '../assessment/plain-needs'
 import { isIntravenous } from '../contrast/outcome'
+import { kidneyHeld } from '../safety/kidney'
 
 /** On every letter, page and printout. */
 export const caution = 'This page explains a decision made by your imaging doctors. It does not replace their advice.'
@@ -55,11 +56,11 @@ export function beforeSection(contrast: DecidableOutcome, assessment: LetterAsse
   return section('before', 'Before your scan', paragraphs, items)
 }
 
-function bloodTest({ kidney, findings }: LetterAssessment, needs: readonly Need[], policy: Policy): string[] {
-  if (needs.some(need => need.kind === 'creatinine') || findings.some(found => found.topic === 'dialysis')) return []
+function bloodTest({ kidney }: LetterAssessment, needs: readonly Need[], policy: Policy): string[] {
+  if (needs.some(need => need.kind === 'creatinine') || kidney.status === 'dialysis') return []
   if (kidney.currency === 'current' && kidney.creatinine !== null && kidney.gateEgfr !== null) {
     const day = DateTime.fromISO(kidney.creatinine.collectedAt, { zone: policy.department.timeZone }).setLocale('en-US').toFormat('LLLL d')
-    return [findings.some(found => found.topic === 'kidney' && found.severity === 'hold')
+    return [kidneyHeld(kidney, policy)
       ? `A doctor looked at your blood test from ${day}. They agreed that you can have contrast.`
       : `Your blood test from ${day} gives no reason to leave contrast out.`]
   }

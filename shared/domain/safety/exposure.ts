@@ -11,6 +11,27 @@ export function findExposure(context: SafetyContext): SafetyFinding[] {
   return [...findInterval(context), ...findEarlierDoses(context)]
 }
 
+/**
+ * Earlier doses, each once: the department's own entry and the hospital record's of one agent on one day are the same dose.
+ * The department's own comes first, since it knows the amount.
+ */
+export function distinctDoses(exposures: readonly GadoliniumExposure[], zone: string): GadoliniumExposure[] {
+  const trust = ['ledger', 'record', 'typed'] as const
+  const sorted = [...exposures].sort((a, b) => trust.indexOf(a.source) - trust.indexOf(b.source))
+  const kept: GadoliniumExposure[] = []
+  for (const dose of sorted) {
+    const twin = kept.find(other => other.source !== dose.source && dayOf(other, zone) === dayOf(dose, zone)
+      && (other.agent === dose.agent || other.agent === null || dose.agent === null))
+    if (!twin) kept.push(dose)
+  }
+  return kept
+}
+
+function dayOf({ givenAt }: GadoliniumExposure, zone: string): string {
+  const at = DateTime.fromISO(givenAt, { zone })
+  return givenAt.includes('T') && at.isValid ? at.toFormat('yyyy-MM-dd') : givenAt
+}
+
 /** The latest moment a dose can have been given: a date alone may mean its last minute, so the interval is never overstated. */
 function latestInstant(exposure: GadoliniumExposure, zone: string): DateTime | null {
   const start = DateTime.fromISO(exposure.givenAt, { zone })
@@ -55,11 +76,13 @@ function findInterval(context: SafetyContext): SafetyFinding[] {
 }
 
 function findEarlierDoses(context: SafetyContext): SafetyFinding[] {
-  const { exposures, agents } = context
+  const { agents } = context
+  const zone = context.policy.department.timeZone
+  const exposures = distinctDoses(context.exposures, zone)
   if (exposures.length === 0) return []
   const known = exposures.filter(exposure => exposure.amountMmol !== null)
   const total = known.reduce((sum, exposure) => sum + (exposure.amountMmol ?? 0), 0)
-  const dates = exposures.map(exposure => exposure.givenAt.slice(0, 10)).sort()
+  const dates = exposures.map(exposure => dayOf(exposure, zone)).sort()
   const doses = exposures.length === 1 ? '1 earlier gadolinium dose' : `${exposures.length} earlier gadolinium doses`
   const amount = known.length === 0 ? 'amounts not recorded' : known.length === exposures.length
     ? `${total.toFixed(1)} mmol in all`

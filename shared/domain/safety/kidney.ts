@@ -1,5 +1,8 @@
 import type { SafetyContext } from './context'
 import type { SafetyFinding } from './types'
+import type { KidneyFunction } from '../kidney/types'
+import type { Policy } from '../policy/types'
+import { countsAsBelow } from '../kidney/evaluate'
 import { isAcute } from '../kidney/injury'
 import { cannotWait, groupOneAgents, mayBeIntravenous } from './context'
 import { finding } from './finding'
@@ -7,6 +10,11 @@ import { safetySources } from './sources'
 
 /** Below this eGFR, mL/min/1.73 m², ACR group I agents are contraindicated whatever the department's own hold. */
 const groupOneLimit = 30
+
+/** Whether kidney function alone holds contrast by vein for a radiologist: below the department's hold, on dialysis, or unsteady. */
+export function kidneyHeld(kidney: KidneyFunction, policy: Policy): boolean {
+  return countsAsBelow(kidney, policy.holdBelowEgfr.value)
+}
 
 /**
  * Kidney function for an agent given by vein: the department's hold, injury, and what to do while it is not known.

@@ -56,9 +56,11 @@ const screening: fc.Arbitrary<ScreeningAnswers> = fc.record({
   specialNeeds: fc.subarray(['interpreter', 'wheelchair', 'claustrophobia', 'sedation', 'cannot-consent', 'hard-iv-access']),
 })
 
+type Asked = Pick<AssessmentInputs, 'questionId' | 'answers'>
+
 /** A question with any mixture of answered, unknown, open and invalid deciders, or none chosen. */
-const asked = fc.oneof(
-  { weight: 1, arbitrary: fc.constantFrom({ questionId: null, answers: {} }, { questionId: 'gone', answers: { a: 'b' } }) },
+const asked: fc.Arbitrary<Asked> = fc.oneof(
+  { weight: 1, arbitrary: fc.constantFrom<Asked>({ questionId: null, answers: {} }, { questionId: 'gone', answers: { a: 'b' } }) },
   {
     weight: 9,
     arbitrary: fc.constantFrom(...starterQuestions).chain(question => fc.record({

@@ -1,6 +1,7 @@
 import { describe, expect, it } from 'vitest'
 import { countText, fleschKincaidGrade, readingGradeCeiling } from '#shared/domain/letter/readability'
 import { findSafety } from '#shared/domain/safety/index'
+import type { GadoliniumExposure } from '#shared/domain/safety/types'
 import type { Situation } from './situation'
 import { situation } from './situation'
 
@@ -106,8 +107,8 @@ const tables: Record<string, Row[]> = {
   ],
 }
 
-function dose(givenAt: string) {
-  return { id: 'e1', agent: 'gadobutrol' as const, agentText: 'gadobutrol', givenAt, amountMmol: 7.4, source: 'record' as const }
+function dose(givenAt: string): GadoliniumExposure {
+  return { id: 'e1', agent: 'gadobutrol', agentText: 'gadobutrol', givenAt, amountMmol: 7.4, source: 'record' }
 }
 
 for (const [topic, rows] of Object.entries(tables)) {
@@ -150,6 +151,13 @@ describe('safety findings', () => {
     const [hold] = findSafety(situation({ kidney: { gateEgfr: 20 } }))
     expect(hold?.text).toMatch(/US labels/)
     expect(hold?.text).toMatch(/ACR/)
+  })
+
+  it('count a dose once that both the department and the hospital record hold', () => {
+    const twice = [dose('2025-03-04T16:00:00Z'), { ...dose('2025-03-04'), id: 'l1', source: 'ledger' as const }]
+    const text = (exposures: typeof twice) => findSafety(situation({ exposures })).find(found => found.id === 'exposure-earlier-doses')?.text
+    expect(text(twice)).toMatch(/^1 earlier gadolinium dose on 2025-03-04, 7\.4 mmol in all/)
+    expect(text([...twice, dose('2025-09-01')])).toMatch(/^2 earlier gadolinium doses from 2025-03-04 to 2025-09-01, 14\.8 mmol/)
   })
 
   it('follow the department\'s own hold', () => {
