@@ -6,7 +6,7 @@ import { endSession } from '#server/services/session/end-session'
 import { findSession } from '#server/services/session/find-session'
 import { Unavailable } from '#server/services/errors'
 import { useApp } from '#server/utils/app'
-import { log } from '#server/utils/log'
+import { describeError, log } from '#server/utils/log'
 import { currentAuthCall } from './attempt'
 import { absoluteSeconds, sessionCookie } from './cookie'
 import { hashSecret } from './secrets'
@@ -51,7 +51,7 @@ export function authOptions(): AuthOptions {
           return begun && { id: begun.userId, secret: begun.secret }
         }
         catch (error) {
-          if (!(error instanceof Unavailable)) log.error({ requestId: call.requestId, err: error instanceof Error ? error.stack : 'unknown' }, 'sign-in failed')
+          if (!(error instanceof Unavailable)) log.error({ requestId: call.requestId, error: describeError(error) }, 'sign-in failed')
           call.busy = true
           throw new Error('Busy')
         }

@@ -5,6 +5,12 @@ import { log } from '#server/utils/log'
 import { assertDurable, beginStart, databaseLevel } from '#server/utils/readiness'
 import { assertDemoStaysHome, assertSecretIsRandom } from '#server/utils/start-checks'
 
+// Both sign-in libraries read their own variable for what NUXT_ORIGIN says already, one of them before any plugin runs.
+if (process.env.NUXT_ORIGIN) {
+  process.env.AUTH_ORIGIN = `${process.env.NUXT_ORIGIN}/api/auth`
+  process.env.NEXTAUTH_URL = process.env.AUTH_ORIGIN
+}
+
 /**
  * Brings the server up: settings first, then the database. Nitro does not wait for plugins, so calls wait here instead; a
  * server that cannot start says why and ends, rather than answer half.

@@ -2,7 +2,7 @@ import { setResponseHeader, setResponseStatus } from 'h3'
 import type { H3Event } from 'h3'
 import { EhrUnavailable } from '#server/ehr/errors'
 import { Invalid, ServiceError, Stale, StateConflict, TooMany, Unavailable } from '#server/services/errors'
-import { log } from './log'
+import { describeError, log } from './log'
 
 /** RFC 9457 problem details, as every failed call answers. */
 export interface ProblemDetails {
@@ -22,7 +22,7 @@ export function answerProblem(event: H3Event, error: unknown): ProblemDetails {
   const known = recognise(error)
   const requestId = event.context.requestId
   if (known.status >= 500) {
-    log.error({ requestId, code: known.code, err: error instanceof Error ? (error.stack ?? error.message) : 'unknown' }, 'request failed')
+    log.error({ requestId, code: known.code, error: describeError(error) }, 'request failed')
   }
   setResponseStatus(event, known.status)
   setResponseHeader(event, 'content-type', 'application/problem+json; charset=utf-8')

@@ -1,5 +1,5 @@
+import { addedAuditEvents } from '#server/database/append'
 import type { Database } from '#server/database/client'
-import { auditEvents } from '#server/database/schema/trail'
 import type { ServiceContext } from '../context'
 import type { AuditAction } from '#shared/domain/access/audit'
 
@@ -18,7 +18,7 @@ export interface AuditEntry {
 /** Writes the audit event in the caller's transaction: if it fails, the change fails with it. */
 export async function recordAudit(tx: Database, ctx: ServiceContext, entry: AuditEntry): Promise<void> {
   const { actor } = ctx
-  await tx.insert(auditEvents).values({
+  await tx.insert(addedAuditEvents).values({
     actorKind: actor.kind,
     actorId: actor.kind === 'user' ? actor.userId : null,
     actorName: actor.kind === 'user' || actor.kind === 'system' ? actor.name : actor.kind,

@@ -8,9 +8,10 @@ import { weighDecision } from '#shared/domain/request/decision'
 import type { approvalSchema } from '#shared/schemas/requests'
 import type { WriteResult } from '#shared/types/views'
 import type { Database } from '#server/database/client'
-import { decisions, needEvents } from '#server/database/schema/requests'
+import { decisions } from '#server/database/schema/requests'
 import { enqueue } from '#server/jobs/queue'
 import { userOf } from '../context'
+import { addedNeedEvents } from '#server/database/append'
 import type { ServiceContext } from '../context'
 import { Invalid, Stale } from '../errors'
 import type { FieldProblem } from '../errors'
@@ -137,5 +138,5 @@ function checkDecision(input: Approval, assessed: Assessed, inForce: RulesInForc
 
 async function waiveNeeds(tx: Database, ctx: ServiceContext, requestId: string, waived: Approval['waivedNeeds'], byId: string): Promise<void> {
   if (waived.length === 0) return
-  await tx.insert(needEvents).values(waived.map(({ kind, reason }) => ({ requestId, kind, state: 'waived' as const, note: reason, byId })))
+  await tx.insert(addedNeedEvents).values(waived.map(({ kind, reason }) => ({ requestId, kind, state: 'waived' as const, note: reason, byId })))
 }

@@ -1,7 +1,7 @@
 import type { z } from 'zod'
 import type { needMarkSchema } from '#shared/schemas/requests'
 import type { WriteResult } from '#shared/types/views'
-import { needEvents } from '#server/database/schema/requests'
+import { addedNeedEvents } from '#server/database/append'
 import { userOf } from '../context'
 import type { ServiceContext } from '../context'
 import { changeRequest, conflictError } from './change'
@@ -17,7 +17,7 @@ export async function markNeed({ ctx, input }: { ctx: ServiceContext, input: { i
     apply: async (tx, loaded) => {
       const { request } = loaded
       if (!['sent', 'queried', 'reopened', 'approved', 'booked'].includes(request.state)) throw conflictError(loaded)
-      await tx.insert(needEvents).values({ requestId: request.id, kind: input.kind, state: input.state, note: input.note, byId: actor.userId })
+      await tx.insert(addedNeedEvents).values({ requestId: request.id, kind: input.kind, state: input.state, note: input.note, byId: actor.userId })
       return { audit: 'need.mark', detail: { need: input.kind, state: input.state } }
     },
   })
