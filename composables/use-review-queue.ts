@@ -63,7 +63,8 @@ export function useReviewQueue(filter: Ref<ReviewFilter>) {
 
   async function look() {
     if (document.visibilityState !== 'visible') return
-    const result = await api.get<ReviewView>('/api/review', { filter: filter.value, limit: 1 })
+    // A look by itself must not keep an unattended session alive.
+    const result = await api.get<ReviewView>('/api/review', { filter: filter.value, limit: 1 }, { background: true })
     if (result.ok) waitingTotal.value = result.data.total
   }
 

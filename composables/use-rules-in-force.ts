@@ -7,7 +7,7 @@ import { useApi } from '~/composables/use-api'
 /** Guidance and policy in force, read once in the browser; null until they are there. */
 export function useRulesInForce() {
   const api = useApi()
-  const { data, refresh } = useAsyncData('rules-in-force', async () => {
+  const { data, status, refresh } = useAsyncData('rules-in-force', async () => {
     const [guidance, policy] = await Promise.all([api.get<GuidanceView>('/api/guidance'), api.get<PolicyView>('/api/policy')])
     return guidance.ok && policy.ok ? { guidance: guidance.data, policy: policy.data } : null
   }, { server: false, lazy: true, dedupe: 'defer' })
@@ -16,5 +16,7 @@ export function useRulesInForce() {
     ? { guidance: data.value.guidance.guidance, policy: data.value.policy.policy, agents: starterAgents }
     : null)
 
-  return { rules, view: data, refresh }
+  const pending = computed(() => status.value === 'idle' || status.value === 'pending')
+  const failed = computed(() => !pending.value && data.value === null)
+  return { rules, view: data, pending, failed, refresh }
 }

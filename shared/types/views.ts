@@ -255,6 +255,9 @@ export interface AuditView {
   outcome: 'ok' | 'refused'
 }
 
+/** Whom to call, beside every answer of the patient's page, also a refused one (`department` in its problem details). */
+export interface ExplanationContact { name: string, phone: string, callHours: string }
+
 /** What the patient's page shows once the date of birth was right. */
 export interface ExplanationView { letter: Letter, department: { name: string, phone: string, callHours: string, timeZone: string } }
 
