@@ -32,9 +32,7 @@ function expectKidney({ kidney }: Assessment, { context }: Vignette): void {
     expectEgfr(kidney.egfr?.value, context.expectedEgfrMain)
     expectEgfr(kidney.beside?.value, context.expectedEgfr)
   }
-  else if (context.expectedEgfrRange == null && context.expectedEgfrCombined == null && context.expectedEgfrCreatinineOnly == null) {
-    expectEgfr(kidney.egfr?.value, context.expectedEgfr)
-  }
+  else expectEgfr(kidney.egfr?.value, context.expectedEgfr)
   if (context.expectedEgfrCombined != null) expectEgfr(combined?.value, context.expectedEgfrCombined)
   if (context.expectedEgfrCreatinineOnly != null) expectEgfr(alone?.value, context.expectedEgfrCreatinineOnly)
   if (context.expectedEgfrRange != null) {

@@ -1,5 +1,6 @@
 import type { Judgement } from './judge'
 import type { Assessment, Clause } from './types'
+import type { SafetyFinding } from '../safety/types'
 import type { Source } from '../source'
 import { isIntravenous, outcomeWords } from '../contrast/outcome'
 import { safetySources } from '../safety/sources'
@@ -35,10 +36,15 @@ export function becauseClauses(judged: Judgement): Clause[] {
     clauses.push({ text: guidance.because + note, source: mainSource(question.sources) })
   }
   for (const found of findings) {
-    if (found.severity !== 'info' && found.topic !== 'kidney' && found.topic !== 'dialysis') clauses.push({ text: found.text, source: found.source })
+    if (weighs(found) && found.topic !== 'kidney' && found.topic !== 'dialysis') clauses.push({ text: found.text, source: found.source })
   }
   if (wanted !== null && wanted !== 'none' && suggestion !== 'none') clauses.push(...kidneyClauses(judged))
   return clauses
+}
+
+/** Whether a finding moved the answer; one that only adds a need stands under Provided. */
+function weighs(found: SafetyFinding): boolean {
+  return found.turns !== null || found.asksRadiologist || (found.severity !== 'info' && found.barsAgents.length > 0)
 }
 
 function mainSource(sources: readonly Source[]): Source | null {

@@ -11,6 +11,11 @@ import { safetySources } from './sources'
 /** Below this eGFR, mL/min/1.73 m², ACR group I agents are contraindicated whatever the department's own hold. */
 const groupOneLimit = 30
 
+/** The published position a department follows, inside a sentence. */
+const positionWords = {
+  label: 'the US labels', acr: 'the ACR with a hold of its own', esur: 'the ESUR with a hold of its own', local: 'its own rule',
+} as const satisfies Record<Policy['kidneyPosition']['value'], string>
+
 /** Whether kidney function alone holds contrast by vein for a radiologist: below the department's hold, on dialysis, or unsteady. */
 export function kidneyHeld(kidney: KidneyFunction, policy: Policy): boolean {
   return countsAsBelow(kidney, policy.holdBelowEgfr.value)
@@ -63,8 +68,8 @@ function findLevel(context: SafetyContext): SafetyFinding[] {
   if (gate < hold) {
     return [finding({
       id: 'kidney-below-hold', topic: 'kidney', severity: 'hold',
-      text: `eGFR is below ${hold}: the department holds contrast for a radiologist's word. Group I agents are barred. `
-        + 'US labels advise against contrast here unless it is essential; the ACR and the National Kidney Foundation report no NSF in '
+      text: `eGFR is below ${hold}: the department, following ${positionWords[context.policy.kidneyPosition.value]}, holds contrast for a radiologist's word. `
+        + 'Group I agents are barred; one standard dose at most. US labels advise against contrast here unless it is essential; the ACR and the National Kidney Foundation report no NSF in '
         + '4,931 group II doses below 30, and that holding back may harm more.',
       plain: 'Your kidneys work less well. A doctor decides about contrast first.',
       addsNeeds: ['radiologist-word'], barsAgents: groupOneAgents(context), asksRadiologist: true,
@@ -114,13 +119,10 @@ function findMissing(context: SafetyContext): SafetyFinding[] {
     }))
   }
   if (!open) return findings
-  const why = kidney.currency === 'too-old' ? 'The newest creatinine is too old for the planned exam' : kidney.status === 'could-not-look'
-    ? 'The hospital record could not be read, so creatinine is not known'
-    : 'No usable creatinine is at hand'
   if (cannotWait(context)) {
     findings.push(finding({
       id: 'kidney-unknown-urgent', topic: 'kidney', severity: 'caution',
-      text: `${why}, and the exam may not be able to wait: a radiologist's word can stand in for the result. Draw blood on arrival all the same.`,
+      text: `${kidney.headline}. The exam may not be able to wait: a radiologist's word can stand in for a new result. Draw blood on arrival all the same.`,
       plain: 'Your scan is urgent. A doctor decides if it can start before the blood test.',
       addsNeeds: ['creatinine', 'radiologist-word'], asksRadiologist: true,
       source: context.policy.creatinineWindowDays.source,
@@ -129,7 +131,7 @@ function findMissing(context: SafetyContext): SafetyFinding[] {
   else {
     findings.push(finding({
       id: kidney.currency === 'too-old' ? 'kidney-creatinine-too-old' : 'kidney-creatinine-missing', topic: 'kidney', severity: 'caution',
-      text: `${why}: a new result is needed first. Missing is not normal.`,
+      text: `${kidney.headline}. A new result is needed first: missing is not normal.`,
       plain: 'You need a blood test to check your kidneys before the scan.',
       addsNeeds: ['creatinine'],
       source: context.policy.creatinineWindowDays.source,

@@ -26,62 +26,69 @@ function namedAgent({ screening }: SafetyContext): AgentId[] {
   return screening.reactionAgent === null || screening.reactionAgent === 'unknown' ? [] : [screening.reactionAgent]
 }
 
+/** "Earlier reaction to gadobutrol: mild, allergic-like"; what is not known says how it is taken. */
+function described({ screening, agents }: SafetyContext): string {
+  const severity = screening.reactionSeverity === null || screening.reactionSeverity === 'unknown'
+    ? 'severity not known, taken as moderate'
+    : screening.reactionSeverity
+  const kind = screening.reactionKind === null || screening.reactionKind === 'unknown' ? 'kind not known, taken as allergic-like' : screening.reactionKind
+  return `Earlier reaction to ${agentName(screening.reactionAgent, agents)}: ${severity}, ${kind}`
+}
+
 /** Unknown kind counts as allergic-like, unknown severity as moderate. */
 function allergicLike(context: SafetyContext): SafetyFinding {
-  const { screening, policy, agents } = context
-  const severity = screening.reactionSeverity
-  const to = `to ${agentName(screening.reactionAgent, agents)}`
-  const kind = screening.reactionKind === 'allergic-like' ? 'allergic-like' : 'not described, so taken as allergic-like'
+  const { policy } = context
+  const severity = context.screening.reactionSeverity
   const named = namedAgent(context)
-  const bars = named
-  const change = named.length > 0 ? 'Take another agent' : 'Find out which agent it was, so that another can be taken'
-  const oral = policy.premedicationLeadHours.value.oral
-  const lead = `premedication starts ${oral} hours before (${policy.premedicationLeadHours.value.accelerated} on the accelerated schedule)`
-  const common = { topic: 'reaction', barsAgents: bars, asksRadiologist: true, source: safetySources.acrReactions } as const
+  const what = described(context)
+  const change = named.length > 0 ? 'Another agent' : 'Find out which agent it was, so that another can be taken'
+  const { oral, accelerated } = policy.premedicationLeadHours.value
+  const lead = `premedication from ${oral} hours before (${accelerated} on the accelerated schedule)`
+  const watch = `${policy.observationMinutes.value} minutes of observation`
+  const common = { topic: 'reaction', barsAgents: named, asksRadiologist: true, source: safetySources.acrReactions } as const
+  const agentOpen = named.length > 0 ? [] : ['reaction-history' as const]
   if (severity === 'severe') {
     return finding({
       ...common, id: 'reaction-allergic-severe', severity: 'hold',
-      text: `Severe earlier reaction ${to}, ${kind}: leave contrast out or use another test unless it is essential. If it is: another agent, ${lead}, `
-        + 'a physician in the room. Labels bar an agent after a severe reaction to it. An allergy work-up helps.',
+      text: `${what}. Leave contrast out or use another test unless it is essential. If it is: another agent, ${lead}, a physician in the room. `
+        + 'Labels bar an agent after a severe reaction to it. An allergy work-up helps.',
       plain: 'You had a strong reaction to contrast before. A doctor decides if contrast is needed at all.',
-      addsNeeds: ['radiologist-word', 'premedication', 'radiologist-present', 'observation', ...(named.length > 0 ? [] : ['reaction-history' as const])],
+      addsNeeds: ['radiologist-word', 'premedication', 'radiologist-present', 'observation', ...agentOpen],
       turns: 'discuss',
     })
   }
   if (severity === 'mild' && named.length > 0) {
     return finding({
       ...common, id: 'reaction-allergic-mild', severity: 'caution',
-      text: `Mild earlier reaction ${to}, ${kind}: another agent, then ${policy.observationMinutes.value} minutes of observation. `
-        + 'Many departments add no premedication after a mild reaction; the radiologist decides.',
+      text: `${what}. Another agent, then ${watch}. Many departments add no premedication after a mild reaction; the radiologist decides.`,
       plain: 'You had a mild reaction to contrast before. We use another type and watch you for longer.',
       addsNeeds: ['radiologist-word', 'observation'],
     })
   }
-  const degree = severity === 'moderate' ? 'Moderate' : severity === 'mild' ? 'Mild' : 'Undescribed (taken as moderate)'
   return finding({
     ...common, id: severity === 'mild' ? 'reaction-allergic-mild-agent-unknown' : 'reaction-allergic-moderate', severity: 'hold',
-    text: `${degree} earlier reaction ${to}, ${kind}. ${change}; ${lead}; ${policy.observationMinutes.value} minutes of observation. The radiologist decides.`,
+    text: `${what}. ${change}; ${lead}; ${watch}. The radiologist decides.`,
     plain: 'You had a reaction to contrast before. A doctor decides, and you may need to take medicine first.',
-    addsNeeds: ['radiologist-word', 'premedication', 'observation', ...(named.length > 0 && severity !== null && severity !== 'unknown' ? [] : ['reaction-history' as const])],
+    addsNeeds: ['radiologist-word', 'premedication', 'observation', ...(severity === null || severity === 'unknown' ? ['reaction-history' as const] : agentOpen)],
   })
 }
 
+/** Nausea, warmth, fainting and the like: premedication does not prevent them. */
 function physiologic(context: SafetyContext): SafetyFinding {
-  const { screening, agents } = context
-  const to = `to ${agentName(screening.reactionAgent, agents)}`
-  if (screening.reactionSeverity === 'severe') {
+  const what = described(context)
+  if (context.screening.reactionSeverity === 'severe') {
     return finding({
       id: 'reaction-physiologic-severe', topic: 'reaction', severity: 'hold',
-      text: `Severe physiologic reaction ${to}: a radiologist's word is needed. Premedication does not prevent this kind.`,
+      text: `${what}. A radiologist's word is needed. Premedication does not prevent this kind.`,
       plain: 'You were very unwell after contrast before. A doctor decides about contrast first.',
       addsNeeds: ['radiologist-word', 'radiologist-present', 'observation'], barsAgents: namedAgent(context), asksRadiologist: true,
       source: safetySources.acrReactions,
     })
   }
-  const mild = screening.reactionSeverity === 'mild'
+  const mild = context.screening.reactionSeverity === 'mild'
   return finding({
     id: mild ? 'reaction-physiologic-mild' : 'reaction-physiologic-moderate', topic: 'reaction', severity: mild ? 'info' : 'caution',
-    text: `${mild ? 'Mild' : 'Moderate'} physiologic reaction ${to}: no premedication, which helps only against allergic-like reactions.`,
+    text: `${what}. No premedication, which helps only against allergic-like reactions.`,
     plain: 'You felt unwell after contrast before. We keep an eye on you after the injection.',
     addsNeeds: mild ? [] : ['observation'],
     source: safetySources.acrReactions,

@@ -88,6 +88,28 @@ describe('an assessment', () => {
   })
 })
 
+describe('Because', () => {
+  it('holds what moved the answer and leaves what only adds a need to Provided', () => {
+    const because = texts(assess({ ...marta, patient: { ...marta.patient, weightKg: null }, screening: { ...quietScreening, implants: 'yes', asthma: 'yes' } }, rules).because)
+    expect(because).not.toMatch(/weight|implant|asthma/i)
+    const reacted = texts(assess({ ...marta, screening: { ...quietScreening, earlierReaction: 'yes' } }, rules).because)
+    expect(reacted).toMatch(/Earlier reaction to an agent that is not known: severity not known, taken as moderate, kind not known, taken as allergic-like/)
+  })
+
+  it('says in one line that the kidneys give no reason to hold', () => {
+    expect(texts(assess(marta, rules).because)).toMatch(/Kidney function: no reason found/)
+  })
+
+  it('says that an unknown answer would change nothing', () => {
+    const questions = rules.guidance.questions.map(question => question.id === marta.questionId
+      ? { ...question, branches: question.branches.map(branch => ({ ...branch, contrast: 'none' as const })) }
+      : question)
+    const made = assess({ ...marta, answers: { tumorInfection: 'unknown' } }, { ...rules, guidance: { version: 'x', questions } })
+    expect(made.suggestion).toBe('none')
+    expect(texts(made.because)).toMatch(/What is not known would not change this/)
+  })
+})
+
 describe('needs after the radiologist has chosen', () => {
   it('follow the choice, and the word is given', () => {
     const low = { ...marta, readings: [creatinine(2.4, '2026-11-30T14:00:00Z')] }
