@@ -1,4 +1,5 @@
 import { DateTime } from 'luxon'
+import { ageAt } from '../kidney/age'
 
 /**
  * A person's age in words, for the line that names them: "61 years", "14 months", "9 days"; "about 61 years" where the record
@@ -13,7 +14,7 @@ export function ageWords(birthDate: string, now: string, timeZone: string): stri
   const born = DateTime.fromISO(birthDate, { zone: timeZone })
   if (!born.isValid || !today.isValid || born > today) return 'age not known'
   const about = birthDate.length < 10 ? 'about ' : ''
-  const years = Math.floor(today.diff(born, 'years').years)
+  const years = ageAt(birthDate, today.toMillis(), timeZone)?.oldest.completedYears ?? 0
   if (years >= 2) return `${about}${years} years`
   const months = Math.floor(today.diff(born, 'months').months)
   if (months >= 2) return `${about}${months} months`
