@@ -36,7 +36,7 @@ export const conditionTopics: readonly Topic[] = [
   },
   {
     id: 'end-stage-kidney-disease', snomed: ['46177005', '433146000'], icd: ['N185', 'N186', 'I120', 'I1311', 'I132'],
-    words: /end[- ]stage (renal|kidney)|kidney failure|renal failure|(ckd|kidney disease),? (stage )?(5|v)\b/,
+    words: /end[- ]stage (renal|kidney)|(?<!acute )(kidney|renal) failure|(ckd|kidney disease),? (stage )?(5|v)\b/,
     suggests: { field: 'kidneyDisease', value: 'yes' },
   },
   {
