@@ -3,6 +3,7 @@ import type { Assessment, Clause } from './types'
 import type { SafetyFinding } from '../safety/types'
 import type { Source } from '../source'
 import { isIntravenous, outcomeWords } from '../contrast/outcome'
+import { isAcute } from '../kidney/injury'
 import { safetySources } from '../safety/sources'
 import { plainNeed } from './plain-needs'
 import { windowAdjective } from './words'
@@ -19,11 +20,11 @@ export function sentenceOf({ question, guidance, suggestion, turnedBy }: Judgeme
   if (question === null) return 'Choose the clinical question: it decides whether contrast helps'
   if (guidance === null || guidance.status === 'needs-answers' || suggestion === null) {
     const open = guidance?.status === 'needs-answers' ? guidance.deciders.length : 1
-    return `${question.exam}, with or without contrast: ${open === 1 ? 'one answer decides' : `${open} answers decide`}`
+    return `${question.exam}, with or without contrast: ${open === 1 ? 'one answer decides' : `${['two', 'three'][open - 2] ?? open} answers decide`}`
   }
   const reason = turnedBy === null ? guidance.inShort : turnedInShort[turnedBy.id] ?? 'a safety finding holds contrast back'
-  // "MRI pituitary, dynamic, without contrast": an exam named with a comma needs another one.
-  const comma = question.exam.includes(',') ? ',' : ''
+  // "MRI pituitary, dynamic, without contrast", "MRI pancreas with MRCP, without contrast": such names need a comma after them.
+  const comma = /,| with /.test(question.exam) ? ',' : ''
   return `${question.exam}${comma} ${outcomeWords[suggestion].phrase}, because ${reason}`
 }
 
@@ -78,6 +79,8 @@ function notNeeded({ suggestion, kidney, needs }: Judgement): Clause[] {
   if (suggestion === 'intra-articular') return [{ text: 'No lab work: kidney function does not decide an injection into a joint', source: safetySources.joints }]
   if (suggestion === null || !isIntravenous(suggestion) || needs.some(need => need.kind === 'creatinine')) return []
   if (kidney.status === 'dialysis') return [{ text: 'No new lab work: on dialysis the creatinine decides nothing', source: safetySources.acrNkf }]
+  // An unsteady creatinine may well be repeated: nobody is told that no lab is needed.
+  if (isAcute(kidney.injury)) return []
   if (kidney.currency === 'current' && kidney.windowDays !== null) {
     return [{ text: `No new lab work: the creatinine is inside the ${windowAdjective(kidney.windowDays)} window`, source: null }]
   }

@@ -18,6 +18,12 @@ describe('an assessment', () => {
     expect(provided.find(clause => clause.text.startsWith('An IV start'))?.owner).toBe('scheduler')
   })
 
+  it('never says that no lab is needed while creatinine is unsteady', () => {
+    const rising = assess({ ...marta, readings: [creatinine(0.9, '2026-11-29T14:00:00Z'), creatinine(1.6, '2026-11-30T14:00:00Z')] }, rules)
+    expect(rising.kidney.injury.status).toBe('aki')
+    expect(texts(rising.provided)).not.toMatch(/No new lab work/)
+  })
+
   it('names the source of its main reason', () => {
     expect(assess(marta, rules).because[0]?.source?.body).toBe('American College of Radiology')
   })
