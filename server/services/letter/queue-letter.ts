@@ -1,4 +1,4 @@
-import { and, eq, inArray, isNull } from 'drizzle-orm'
+import { and, eq, inArray, isNotNull, isNull, or } from 'drizzle-orm'
 import { assessDecision } from '#shared/domain/assessment/assess'
 import type { Assessment, AssessmentInputs } from '#shared/domain/assessment/types'
 import { starterAgents } from '#shared/domain/contrast/agents'
@@ -38,13 +38,15 @@ export function writeLetter(ctx: Pick<ServiceContext, 'now'>, { loaded, decision
   const { request, patient, scanner } = loaded
   if (!decision.contrast || decision.contrast === 'discuss') throw new StateConflict('There is nothing signed to write about.')
   const decided = { contrast: decision.contrast, agent: decision.agent }
+  // Findings and needs of what was signed, which may differ from what was suggested.
+  const found = assessDecision(assessment.inputs, assessment.inForce.rules, decided)
   const common = {
     language: 'en' as const,
     now: ctx.now.toISOString(),
     patient: { fullName: patient.displayName, birthDate: assessment.inputs.patient.birthDate, sex: assessment.inputs.patient.sex },
     exam: { region: request.region ?? '' },
-    assessment: assessment.result,
-    needs: assessDecision(assessment.inputs, assessment.inForce.rules, decided).needs,
+    assessment: { ...assessment.result, findings: found.findings, kidney: found.kidney },
+    needs: found.needs,
     decision: { contrast: decided.contrast, agent: letterAgent(decided.agent) },
     policy: assessment.inForce.rules.policy,
   }
@@ -94,7 +96,12 @@ export async function queueLetter(tx: Database, ctx: ServiceContext, facts: Lett
 export async function callOffLetters(tx: Database, ctx: ServiceContext, loaded: LoadedRequest): Promise<void> {
   const { request } = loaded
   const told = await tx.select({ id: letters.id }).from(letters)
-    .where(and(eq(letters.requestId, request.id), inArray(letters.state, ['delivered', 'handed-over']), inArray(letters.kind, ['before', 'changed'])))
+    .where(and(
+      eq(letters.requestId, request.id),
+      // Once delivered is told, even where its link was closed afterwards.
+      or(inArray(letters.state, ['delivered', 'handed-over']), isNotNull(letters.deliveredAt)),
+      inArray(letters.kind, ['before', 'changed']),
+    ))
   await cancelUndelivered(tx, request.id)
   await revokeLinks(tx, ctx, told.map(letter => letter.id))
   if (told.length === 0 || request.slotStartsAt === null) return
