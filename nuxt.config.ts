@@ -81,6 +81,8 @@ export default defineNuxtConfig({
   auth: {
     provider: { type: 'authjs', trustHost: false, addDefaultCallbackUrl: false },
     globalAppMiddleware: false,
+    // Pages ask /api/me; the library's own look at the session would be a second one for each page rendered.
+    disableServerSideAuth: true,
     sessionRefresh: { enablePeriodically: false, enableOnWindowFocus: false },
   },
   eslint: { config: { standalone: true } },

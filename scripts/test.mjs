@@ -113,12 +113,19 @@ const fakesEnv = (ports) => ({
   WHEREFORE_TEST_FHIR_URL: `http://127.0.0.1:${ports.fhir}`,
 })
 
+const build = () =>
+  progress.step('Build', async (say) =>
+    (await preparation.build({ processes, output, say, env: { WHEREFORE_BUILD_DIR: buildRoot } })) ? 'built' : 'sources unchanged',
+  )
+
 async function integration(filters) {
+  await build()
   const { url } = await useCluster()
   return withFakes(({ ports }) =>
     vitest('integration', ['integration'], filters, {
       WHEREFORE_TEST_SUPERUSER_URL: url(superuser, 'postgres'),
       WHEREFORE_TEST_TEMPLATE: template,
+      WHEREFORE_TEST_SERVER_DIR: output,
       ...fakesEnv(ports),
     }),
   )
@@ -126,9 +133,7 @@ async function integration(filters) {
 
 async function e2e(filters) {
   const chromium = await preparation.prepareChromium(run)
-  await progress.step('Build', async (say) =>
-    (await preparation.build({ processes, output, say, env: { WHEREFORE_BUILD_DIR: buildRoot } })) ? 'built' : 'sources unchanged',
-  )
+  await build()
   const made = await useCluster()
   return withFakes(async ({ ports, serving }) => {
     const urls = department.databaseUrls(made, endToEnd)
