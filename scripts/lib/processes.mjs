@@ -81,7 +81,7 @@ export function createProcesses({ cwd, logs, onChange = () => {} }) {
     while (program.result === null && performance.now() < until) {
       if ((await answers(url)) && program.result === null) {
         void program.ended.then((result) => {
-          if (!program.wanted && !closing) onCrash?.(describe(name, { ...result, log: program.log, output: tailOf(program.log) }))
+          if (!program.wanted && !closing) onCrash?.(describe(name, { ...result, log: program.log, output: textOf(program.log) }))
         })
         return program
       }
@@ -90,9 +90,9 @@ export function createProcesses({ cwd, logs, onChange = () => {} }) {
     if (closing) throw new Stopped('Stopped.')
     const result = program.result
     await stop(program)
-    const output = tailOf(program.log)
+    const output = textOf(program.log)
     if (result) throw new Failure(describe(name, { code: result.code, log: program.log, output: result.error?.message ?? output }))
-    throw new Failure(`The ${name} did not answer at ${url} within ${timeout / 1000} s.\n${output}`)
+    throw new Failure(`The ${name} did not answer at ${url} within ${timeout / 1000} s.\n${tail(output)}`)
   }
 
   /** Ends one program: SIGTERM to its group, SIGKILL when it has not ended after `grace` milliseconds. */
@@ -135,12 +135,19 @@ export function tail(text, lines = 25) {
   return text.trimEnd().split('\n').slice(-lines).map((line) => `    ${line}`).join('\n')
 }
 
-const tailOf = (log) => (log ? tail(readFileSync(log, 'utf8')) : '')
+/** What to show of a failed program: from its first error on, else the end. */
+export function excerpt(text, lines = 25) {
+  const all = text.trimEnd().split('\n')
+  const first = all.findIndex((line) => /\bERROR\b|\b[A-Za-z]*Error: |\bnpm error\b/.test(line))
+  return tail(first === -1 ? text : all.slice(first, first + lines).join('\n'), lines)
+}
+
+const textOf = (log) => (log ? readFileSync(log, 'utf8') : '')
 
 function describe(name, { code, signal, log, output }) {
   const how = signal ? `was ended by ${signal}` : `ended with code ${code}`
   const where = log ? `\n  Whole log: ${log}` : ''
-  return `The ${name} ${how}.\n${tail(output ?? '')}${where}`
+  return `The ${name} ${how}.\n${excerpt(output ?? '')}${where}`
 }
 
 /** True when the address answers with anything but a server error. */

@@ -21,6 +21,7 @@ export async function untilSignal({ work, close, say, report, clock = () => perf
     }
   }
   for (const signal of ['SIGINT', 'SIGTERM', 'SIGHUP']) process.on(signal, onSignal)
+  const parent = watchParent(() => onSignal('SIGTERM'))
   // A closed terminal must not keep the database running.
   for (const stream of [process.stdout, process.stderr]) stream.on('error', () => {})
   let code = 0
@@ -45,5 +46,18 @@ export async function untilSignal({ work, close, say, report, clock = () => perf
     report(error)
     code = 1
   }
+  clearInterval(parent)
   return code
+}
+
+/**
+ * npm runs a script through a shell and passes a SIGTERM to that shell alone, which dies without a word to us. Under npm the end
+ * of our parent is therefore the same wish.
+ */
+function watchParent(onEnd) {
+  if (!process.env.npm_lifecycle_event) return undefined
+  const parent = process.ppid
+  return setInterval(() => {
+    if (process.ppid !== parent) onEnd()
+  }, 250).unref()
 }
