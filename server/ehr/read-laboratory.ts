@@ -39,26 +39,33 @@ export async function readLaboratory(question: LaboratoryQuestion): Promise<{ ro
 
 async function readCoded(question: LaboratoryQuestion): Promise<Rows<ObservationResource>> {
   const creatinine = [...loincRefs([...creatinineLoinc, ...cystatinLoinc]), ...question.settings.creatinineCodes]
-  // A date without a zone is taken in the server's own: one day more, and the rest is left out on our side.
-  const date: SearchParams = question.since === null ? {} : { date: `ge${daysBefore(question.since, 1)}` }
   const search = (filters: SearchParams) => readRows({
     ...question,
     resourceType: 'Observation',
-    forms: patientForms(question.patientId, filters, { ...date, _sort: '-date', _count: question.settings.limits.pageSize }),
+    forms: patientForms(question.patientId, filters, resultOrder(question)),
     parse: observationResource,
     owner: ({ subject }) => subject,
   })
-  const byCode = search({ code: tokenList([...creatinine, ...loincRefs(panelLoinc)]) })
-  const capabilities = await question.capabilities
-  if (!capabilities?.types.get('Observation')?.params.has('component-code')) return byCode
-  const [whole, inPanels] = await Promise.all([byCode, search({ 'component-code': tokenList(creatinine) })])
-  return joinRows(whole, inPanels)
+  const insidePanels = async () => {
+    const capabilities = await question.capabilities
+    const offered = capabilities?.types.get('Observation')?.params.has('component-code')
+    return offered ? search({ 'component-code': tokenList(creatinine) }) : null
+  }
+  const [byCode, inPanels] = await Promise.all([search({ code: tokenList([...creatinine, ...loincRefs(panelLoinc)]) }), insidePanels()])
+  return inPanels ? joinRows(byCode, inPanels) : byCode
+}
+
+/** A date without a zone is taken in the server's own: one day more is asked for, and left out again on our side. */
+function resultOrder({ since, settings }: LaboratoryQuestion): SearchParams {
+  const order = { _sort: '-date', _count: settings.limits.pageSize }
+  return since === null ? order : { date: `ge${daysBefore(since, 1)}`, ...order }
 }
 
 /** Results that say creatinine by name only. Servers need not know this question: where they do not, nothing is lost. */
-async function readNamed({ session, settings, patientId }: LaboratoryQuestion): Promise<ObservationResource[]> {
+async function readNamed(question: LaboratoryQuestion): Promise<ObservationResource[]> {
+  const { session, settings, patientId } = question
   try {
-    const answer = await session.search('Observation', [{ 'patient': patientId, 'code:text': 'creatinine', '_count': settings.limits.pageSize }], { maxPages: 3 })
+    const answer = await session.search('Observation', [{ 'patient': patientId, 'code:text': 'creatinine', ...resultOrder(question) }], { maxPages: 3 })
     return answer.resources.flatMap(resource => asObservation(resource) ?? []).filter(({ subject }) => namesPatient(subject, patientId, settings))
   }
   catch (error) {
