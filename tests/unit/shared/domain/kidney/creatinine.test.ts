@@ -1,6 +1,6 @@
 import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
-import { chooseCreatinine, chooseCystatinC } from '#shared/domain/kidney/creatinine'
+import { chooseCreatinine, chooseCystatinC, displayMgPerDl } from '#shared/domain/kidney/creatinine'
 import { observationStatuses } from '#shared/domain/kidney/types'
 import type { LabReading } from '#shared/domain/kidney/types'
 import { daysAgo, now, reading } from './sample'
@@ -125,6 +125,13 @@ describe('several results of one moment', () => {
     const first = reading({ collectedAt: at, issuedAt: daysAgo(2) })
     const { chosen } = chooseCreatinine([first, { ...first, status: 'entered-in-error', issuedAt: daysAgo(1) }], now)
     expect(chosen).toBeNull()
+  })
+})
+
+describe('a creatinine in a sentence', () => {
+  // 1.005 times 100 is a hair below 100.5 in floating point.
+  it.each([[1, '1.00'], [1.005, '1.01'], [0.994, '0.99']])('shows %d as %s', (value, shown) => {
+    expect(displayMgPerDl(value)).toBe(shown)
   })
 })
 

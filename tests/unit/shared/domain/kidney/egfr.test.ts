@@ -63,6 +63,10 @@ describe('an equation refuses', () => {
     expect(ckdEpi2021Creatinine({ ageYears: 40, sex: 'other', creatinine: { value: 1, unit: 'mg/dL' } }).status).toBe('needs-sex')
   })
 
+  it.each([[0, 1], [1, 0], [-1, 1]])('a creatinine of %d with a cystatin C of %d', (creatinineMgPerDl, cystatinCMgPerL) => {
+    expect(ckdEpi2021CreatinineCystatinC({ ageYears: 40, sex: 'male', creatinineMgPerDl, cystatinCMgPerL }).status).toBe('bad-value')
+  })
+
   it('a creatinine without a unit', () => {
     expect(ckdEpi2021Creatinine({ ageYears: 40, sex: 'male', creatinine: { value: 1, unit: null } }).status).toBe('bad-unit')
   })

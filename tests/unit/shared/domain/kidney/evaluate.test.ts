@@ -79,6 +79,12 @@ describe('cystatin C', () => {
     expect(beside.cautions.map(({ id }) => id)).toContain('cystatin-disagrees')
   })
 
+  it('makes a bound of the combined value where either result is one', () => {
+    expect(evaluate(with2(1.9, 1.6, '<')).egfr).toMatchObject({ equation: 'ckd-epi-2021-cr-cys', bound: 'at-least' })
+    expect(evaluate({ readings: [reading({ value: 1.9, comparator: '>' }), reading({ analyte: 'cystatin-c', unit: 'mg/L', value: 1.6, comparator: '>' })] }).egfr)
+      .toMatchObject({ equation: 'ckd-epi-2021-cr-cys', bound: 'at-most' })
+  })
+
   it('is left out where the two limits point to opposite sides', () => {
     const kidney = evaluate({ readings: [reading({ value: 1.9, comparator: '<' }), reading({ analyte: 'cystatin-c', unit: 'mg/L', value: 1.6, comparator: '>' })] })
     expect(kidney).toMatchObject({ egfr: { equation: 'ckd-epi-2021-cr' }, beside: null })
@@ -105,6 +111,9 @@ describe('kidney function of a child', () => {
 
   it('marks a height without a date, and inputs outside the equation', () => {
     expect(cautions({ patient: { ...child, heightAt: null }, readings: [reading({ value: 11 })] })).toEqual(['height-undated', 'outside-equation'])
+    expect(cautions({ patient: { ...child, heightCm: 60 }, readings: [reading({ value: 10 })] })).toEqual([])
+    expect(cautions({ patient: { ...child, heightCm: 59 } })).toEqual(['outside-equation'])
+    expect(cautions({ patient: { heightCm: 230, heightAt: null } })).toEqual([])
   })
 
   it('has none under one year of age, also where the birth date leaves that open', () => {
@@ -112,6 +121,19 @@ describe('kidney function of a child', () => {
     expect(evaluate({ patient: infant })).toMatchObject({ status: 'no-equation', egfr: null, gateEgfr: null })
     expect(evaluate({ patient: infant }).headline).toContain('No eGFR under 1 year of age')
     expect(evaluate({ patient: { ...child, birthDate: '2025' } }).status).toBe('no-equation')
+  })
+
+  it('changes to the adult equation on the 18th birthday, not a day before', () => {
+    const at = (collectedAt: string) => evaluate({
+      patient: { birthDate: '2008-11-20', heightCm: 165, heightAt: daysAgo(30) }, readings: [reading({ value: 0.8, collectedAt })],
+    }).egfr
+    expect(at('2026-11-19T18:00:00Z')?.equation).toBe('ckid-u25-cr')
+    expect(at('2026-11-20T18:00:00Z')).toMatchObject({ equation: 'ckd-epi-2021-cr', ageYears: 18 })
+  })
+
+  it('has an equation for every age up to 120', () => {
+    expect(evaluate({ patient: { birthDate: '1906-01-01' } })).toMatchObject({ status: 'estimated', egfr: { ageYears: 120 } })
+    expect(evaluate({ patient: { birthDate: '1905-01-01' } }).status).toBe('no-equation')
   })
 
   it('is the lower of both equations where the year leaves open whether the patient is 18', () => {
@@ -185,8 +207,25 @@ describe('reasons for doubt', () => {
     expect(cautions({ readings: [reading(), reading({ collectedAt: daysAgo(20), unit: null }), reading({ collectedAt: daysAgo(1), status: 'entered-in-error' })] })).toEqual([])
   })
 
-  it.each([['incomplete'], ['unreachable'], ['not-read']] as const)('say that the record is %s', (state) => {
-    expect(cautions({ record: { state } })).toEqual([`record-${state}`])
+  it.each([
+    ['incomplete', 'The hospital record was only partly read: a newer creatinine may exist'],
+    ['unreachable', 'The hospital record could not be read: a newer creatinine may exist'],
+    ['not-read', 'The hospital record has not been read: a newer creatinine may exist'],
+  ] as const)('say that the record is %s', (state, text) => {
+    expect(evaluate({ record: { state } }).cautions).toEqual([expect.objectContaining({ id: `record-${state}`, text })])
+  })
+
+  it.each([
+    [[1, 40], [1.8, 5], 'Acute kidney injury presumed'],
+    [[2.4, 5], [1.6, 3], 'Creatinine not steady'],
+  ] as const)('name what is unsteady in the headline', (before, last, words) => {
+    const readings = [before, last].map(([value, days]) => reading({ value, collectedAt: daysAgo(days) }))
+    expect(evaluate({ readings }).headline).toMatch(new RegExp(`^${words}\\. eGFR \\d+ cannot be relied on`))
+  })
+
+  it('name an injury that has just passed', () => {
+    const readings = [[1, 8], [2.2, 6], [1.2, 3]].map(([value = 0, days = 0]) => reading({ value, collectedAt: daysAgo(days) }))
+    expect(evaluate({ readings }).headline).toMatch(/^Recent acute kidney injury\. eGFR/)
   })
 
   it('come from the answers: acute illness, pregnancy, liver disease', () => {
