@@ -5,7 +5,7 @@ import type { Database } from '#server/database/client'
 export interface JobPayloads {
   'deliver-letter': { letterId: string }
   'deliver-invitation': { invitationId: string }
-  'notify-clinician': { requestId: string, event: 'query' | 'decision' | 'reopened' }
+  'notify-clinician': { requestId: string, event: 'query' | 'answer' | 'decision' | 'reopened' }
 }
 export type JobName = keyof JobPayloads
 

@@ -53,6 +53,8 @@ export const routeActions = {
   'POST /api/invitations/[token]': 'public',
   'POST /api/explanations/[token]': 'public',
   'GET /api/explanations/current': 'public',
+  // The same as a plain form, for browsers without scripts; the token in the address is what no other site knows.
+  'POST /explanation-form/[token]': 'public',
   // For the machine that runs it: says up or not, nothing else.
   'GET /healthz': 'public',
   'GET /readyz': 'public',
