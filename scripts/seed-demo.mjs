@@ -2,7 +2,9 @@
  * Fills an empty, migrated database with the demonstration department; one that has it already is left alone. Runs from the
  * sources, without a build.
  *
- *   NUXT_DEMO=on NUXT_DATABASE_URL=postgres://… node scripts/seed-demo.mjs
+ *   NUXT_DEMO=on NUXT_DATABASE_URL=postgres://… [NUXT_EHR_BASE_URL=http://…] node scripts/seed-demo.mjs
+ *
+ * With the address of the fake record its people also ask for, decide and book exams, through the product's own steps.
  *
  * Prints one line on what was done, then the demo sign-ins.
  */
@@ -24,9 +26,20 @@ try {
   const { seedDepartment } = await sources.load(join(root, 'server', 'database', 'seed', 'seed-department.ts'))
   handle = openDatabase(url, (error) => console.error(error.message))
   const made = await seedDepartment(handle.db)
-  console.log(made ? `made: Northshore Imaging with ${demoUsers.length} people` : 'there already')
+  const requests = process.env.NUXT_EHR_BASE_URL ? await seedExams(handle) : 0
+  console.log([made ? `made: Northshore Imaging with ${demoUsers.length} people` : 'there already', requests > 0 ? `${requests} requests` : ''].filter(Boolean).join(', '))
   console.log(describeSignIns())
 } finally {
   await handle?.pool.end()
   await sources.close()
+}
+
+/** Lets the demo people work: needs the fake record, since every request reads it. */
+async function seedExams({ db, pool }) {
+  const { registerPool } = await sources.load(join(root, 'server', 'services', 'transaction.ts'))
+  const { createEhrClient } = await sources.load(join(root, 'server', 'ehr', 'client.ts'))
+  const { parseEhrSettings } = await sources.load(join(root, 'server', 'ehr', 'settings.ts'))
+  const { seedRequests } = await sources.load(join(root, 'server', 'database', 'seed', 'seed-requests.ts'))
+  registerPool(db, pool)
+  return await seedRequests(db, createEhrClient(parseEhrSettings({ baseUrl: process.env.NUXT_EHR_BASE_URL })))
 }

@@ -68,10 +68,6 @@ async function start(development) {
     return `${made ? 'made' : 'as it was left'}, migrated, on 127.0.0.1:${cluster.port}`
   })
   const urls = department.databaseUrls(cluster, database)
-  const seeded = await progress.step('Demo data', async () => {
-    const { output: said } = await department.seed({ processes, urls })
-    return { note: said.trim().split('\n')[0] ?? '', said }
-  })
   const env = department.serverEnv({ ports, urls, secret: department.authSecret(dataDir) })
 
   if (development) {
@@ -88,6 +84,10 @@ async function start(development) {
   await progress.step('Fake record', async () => {
     await department.serveRecord(serving)
     return `127.0.0.1:${ports.fhir}`
+  })
+  const seeded = await progress.step('Demo data', async () => {
+    const { output: said } = await department.seed({ processes, urls, ports })
+    return { note: said.trim().split('\n')[0] ?? '', said }
   })
   await progress.step('Server', async () => {
     await (development ? department.serveDevelopment({ ...serving, env }) : department.serveBuilt({ ...serving, output, env }))

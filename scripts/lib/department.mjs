@@ -57,6 +57,7 @@ export function serverEnv({ ports, urls, secret }) {
     NUXT_DEMO: 'on',
     NUXT_EHR_BASE_URL: loopback(ports.fhir),
     NUXT_EHR_AUTH: 'none',
+    NUXT_EHR_RECORD_NUMBER_SYSTEM: 'https://northshore.example/fhir/record-number',
     NUXT_SMTP_HOST: '127.0.0.1',
     NUXT_SMTP_PORT: String(ports.smtp),
     NUXT_SMTP_TLS: 'off',
@@ -71,10 +72,13 @@ export function authSecret(dir) {
   return readFileSync(file, 'utf8')
 }
 
-/** Fills the demonstration department once; a database that has it already says so and is left alone. */
-export const seed = ({ processes, urls }) =>
+/**
+ * Fills the demonstration department once; a database that has it already says so and is left alone. Where the fake record is
+ * up (`ports`), its people also ask for exams, so that no list is empty.
+ */
+export const seed = ({ processes, urls, ports = null }) =>
   processes.must('demo department', node, [join(root, 'scripts', 'seed-demo.mjs')], {
-    env: { ...neutralEnv(), NUXT_DATABASE_URL: urls.appUrl, NUXT_OWNER_DATABASE_URL: urls.ownerUrl, NUXT_WORKER_DATABASE_URL: urls.workerUrl, NUXT_DEMO: 'on' },
+    env: { ...neutralEnv(), NUXT_DATABASE_URL: urls.appUrl, NUXT_OWNER_DATABASE_URL: urls.ownerUrl, NUXT_WORKER_DATABASE_URL: urls.workerUrl, NUXT_DEMO: 'on', ...(ports ? { NUXT_EHR_BASE_URL: loopback(ports.fhir) } : {}) },
   })
 
 /** Catches all mail and shows it on a page; nothing leaves the machine. */
