@@ -2,7 +2,7 @@ import { ref } from 'vue'
 import type { z } from 'zod'
 import type { administrationSchema, bookingSchema, consentSchema, needMarkSchema, unbookSchema } from '#shared/schemas/requests'
 import type { LetterPreview, PreparationRow, RequestView, WriteResult } from '#shared/types/views'
-import { useAnnouncer } from '~/composables/use-announcer'
+import { useLiveAnnouncer } from '~/composables/use-live-announcer'
 import type { ApiProblem, ApiResult } from '~/composables/use-api'
 import { newWriteKey, useApi } from '~/composables/use-api'
 import { useFormErrors } from '~/composables/use-form-errors'
@@ -12,7 +12,7 @@ export type PreparationStep = 'need' | 'booking' | 'release' | 'refusal' | 'give
 /** What the booking desk does to one exam: which step is open, the exam in full where the step asks for it, and the writes. */
 export function usePreparationDesk(done: () => Promise<unknown>) {
   const api = useApi()
-  const announcer = useAnnouncer()
+  const announcer = useLiveAnnouncer()
   const errors = useFormErrors()
   const step = ref<PreparationStep | null>(null)
   const row = ref<PreparationRow | null>(null)

@@ -10,7 +10,7 @@ import type { Sex } from '#shared/domain/kidney/types'
 import type { MissingField } from '#shared/domain/request/complete'
 import { missingForSending } from '#shared/domain/request/complete'
 import type { FormStep } from '#shared/domain/request/form'
-import { useAnnouncer } from '~/composables/use-announcer'
+import { useLiveAnnouncer } from '~/composables/use-live-announcer'
 import { useRequestDraftStore } from '~/stores/request-draft'
 
 /** An answer is worked out this long after the last key press, milliseconds. */
@@ -50,7 +50,7 @@ export interface RequestFormHelp {
 /** Keeps the reasoning sheet in step with the form, in the browser, by the same engine as the server's. */
 export function useRequestForm(): RequestFormHelp {
   const draft = useRequestDraftStore()
-  const { announce } = useAnnouncer()
+  const { announce } = useLiveAnnouncer()
   let timer: ReturnType<typeof setTimeout> | undefined
 
   const question = computed(() => draft.rules?.guidance.questions.find(candidate => candidate.id === draft.form?.questionId) ?? null)

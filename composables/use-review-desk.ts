@@ -3,7 +3,7 @@ import { computed, reactive, ref, watch } from 'vue'
 import { usesContrast } from '#shared/domain/contrast/outcome'
 import { approvalSchema, declineSchema, messageSchema, querySchema, reasonSchema } from '#shared/schemas/requests'
 import type { WriteResult } from '#shared/types/views'
-import { useAnnouncer } from '~/composables/use-announcer'
+import { useLiveAnnouncer } from '~/composables/use-live-announcer'
 import type { ApiResult } from '~/composables/use-api'
 import { useFormErrors } from '~/composables/use-form-errors'
 import { approvalBody, useReviewDecision } from '~/composables/use-review-decision'
@@ -18,7 +18,7 @@ export type ReviewDialog = 'approve' | 'query' | 'decline' | 'reopen' | 'keys'
 
 /** One radiologist at the open request: the draft, the dialogs, and each step to the server. `done` runs after a write. */
 export function useReviewDesk(done: () => Promise<unknown>) {
-  const announcer = useAnnouncer()
+  const announcer = useLiveAnnouncer()
   const { rules } = useRulesInForce()
   const reading = useReviewRequest()
   const { request } = reading

@@ -34,9 +34,9 @@ export function useWorklistTable<Row extends { id: string }>(data: Ref<Row[]>, c
   const helper = createColumnHelper<typeof features, Row>()
   const table = useTable({
     features,
-    columns: columns.map(column => helper.accessor(row => column.value?.(row) ?? '', {
+    columns: helper.columns(columns.map(column => helper.accessor(row => column.value?.(row) ?? '', {
       id: column.id, header: column.label, enableSorting: column.value !== undefined, sortFn: 'alphanumeric', sortDescFirst: false,
-    })),
+    }))),
     data: data.value,
     getRowId: row => row.id,
   })

@@ -8,7 +8,7 @@ export interface Announcer {
 }
 
 /** Speaks through the live regions that stand in app.vue from the first render on. */
-export function useAnnouncer(): Announcer {
+export function useLiveAnnouncer(): Announcer {
   const notices = useNoticesStore()
   return {
     announce: text => notices.announce(text),
