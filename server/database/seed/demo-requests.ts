@@ -14,7 +14,8 @@ interface Common {
 
 /** A demonstration request and how far it gets. Everybody in it is invented. */
 export type DemoRequest =
-  | (Common & { until: 'draft' | 'sent' })
+  | (Common & { until: 'draft' })
+  | (Common & { until: 'sent' })
   | (Common & { until: 'queried', reader: string, query: string })
   | (Common & { until: 'answered', reader: string, query: string, answer: string })
   | (Common & { until: 'declined', reader: string, reason: string, helpInstead: string })
