@@ -49,3 +49,7 @@ function isSignIn(path: string): boolean {
 function isPatientForm(path: string): boolean {
   return path.startsWith('/explanation-form/')
 }
+
+function isPatientForm(path: string): boolean {
+  return path.startsWith('/explanation-form/')
+}

@@ -231,6 +231,9 @@ export interface UserView {
 }
 export interface PracticeView { id: string, name: string, phone: string, users: number, disabled: boolean, version: number }
 
+/** Whose invitation a link is; `again`: the account had a password and gets a new one. */
+export interface InvitationView { name: string, email: string, department: string, again: boolean }
+
 export interface ConnectionsView {
   checkedAt: string
   ehr: ConnectionReport & { address: string }

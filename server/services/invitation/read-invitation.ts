@@ -1,18 +1,11 @@
 import { and, eq, gt, isNull, sql } from 'drizzle-orm'
+import type { InvitationView } from '#shared/types/views'
 import { hashSecret } from '#server/auth/secrets'
 import type { Database } from '#server/database/client'
 import { invitations, users } from '#server/database/schema/people'
 import type { ServiceContext } from '../context'
 import { NotFound } from '../errors'
 import { rulesInForce } from '../rules/in-force'
-
-export interface InvitationView {
-  name: string
-  email: string
-  department: string
-  /** True where the account had a password already and gets a new one. */
-  again: boolean
-}
 
 export interface OpenInvitation { id: string, userId: string, name: string, email: string, passwordHash: string | null }
 
