@@ -100,7 +100,7 @@ export const serveRecord = ({ processes, ports, onCrash }) =>
 
 /** The built server. */
 export const serveBuilt = ({ processes, output, env, onCrash }) =>
-  processes.serve('server', node, [join(output, 'server', 'index.mjs')], { url: `${env.NUXT_ORIGIN}/`, env: { ...env, NODE_ENV: 'production' }, onCrash })
+  processes.serve('server', node, [join(output, 'server', 'index.mjs')], { url: `${env.NUXT_ORIGIN}/readyz`, env: { ...env, NODE_ENV: 'production' }, onCrash })
 
 /** The development server, with hot reload; what it says goes to the terminal. */
 export const serveDevelopment = ({ processes, env, onCrash }) =>
