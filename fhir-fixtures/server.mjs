@@ -69,6 +69,7 @@ export function createFake({ now = Date.now(), pageCap = 50, client } = {}) {
     if (type === undefined || !(type in parameters)) return outcome(404, 'not-supported', 'Unknown resource type')
     if (request.method === 'GET' && id === undefined) return send(200, search(type, url.searchParams, request, base))
     if (request.method === 'POST' && id === '_search' && more === undefined) {
+      if (switches.quirks.ignorePostBody) return send(200, search(type, new URLSearchParams('_id=nobody'), request, base))
       const both = new URLSearchParams([...url.searchParams, ...new URLSearchParams(body)])
       return send(200, search(type, both, request, base))
     }

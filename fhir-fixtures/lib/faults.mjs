@@ -14,6 +14,7 @@ const faults = {
     return 'answered'
   },
   html200: ({ respond }) => respond(200, '<!doctype html><title>Sign in</title><p>Your session has ended.', { 'content-type': 'text/html' }),
+  notFhir: ({ respond }) => respond(404, 'Not found', { 'content-type': 'text/plain' }),
   truncatedJson: ({ respond }) => respond(200, '{"resourceType":"Bundle","type":"searchset","entry":[{"resource":{"resourceType":"Obser'),
   malformedJson: ({ respond }) => respond(200, '{"resourceType":"Bundle",,}'),
   emptyBody: ({ respond }) => respond(200, ''),
@@ -34,7 +35,7 @@ const statusFaults = {
 /** How a page of results is put together differently; see paging.mjs. */
 export const quirkNames = [
   'ignoreSort', 'relativeNext', 'foreignNext', 'loopNext', 'smallPages', 'rowOfAnotherPatient', 'ignoreFilters', 'emptyPages', 'expirePages',
-  'repeatRows', 'outcomeEntry', 'incompleteEntry', 'noTotal', 'numberAsString', 'unknownExtensions', 'lenient',
+  'repeatRows', 'outcomeEntry', 'incompleteEntry', 'noTotal', 'numberAsString', 'unknownExtensions', 'lenient', 'ignorePostBody',
 ]
 
 export class Switches {

@@ -33,6 +33,8 @@ export interface EhrClient {
   readonly settings: EhrSettings
   now: () => number
   breaker: () => BreakerState
+  /** Whether searching by POST has been seen to work, or been refused. */
+  readonly postSearch: { state: 'untried' | 'works' | 'refused' }
   session: (signal?: AbortSignal) => EhrSession
 }
 
@@ -62,7 +64,7 @@ export function createEhrClient(settings: EhrSettings, parts: EhrClientParts = {
     ? null
     : createTokenSource(settings.auth, baseUrl, ask => exchange(send, { ...ask, signal: AbortSignal.timeout(limits.requestMs) }, limits, now), now)
   let known: { capabilities: Capabilities, at: number } | null = null
-  let refusesPost = false
+  const postSearch: EhrClient['postSearch'] = { state: 'untried' }
 
   /** The address as one of ours, or the refusal to go there. */
   function ours(url: string): string {
@@ -73,12 +75,13 @@ export function createEhrClient(settings: EhrSettings, parts: EhrClientParts = {
     return target.href
   }
 
-  async function once(ask: HttpAsk): Promise<FhirJson> {
+  async function once(ask: HttpAsk, requestMs: number): Promise<FhirJson> {
+    const bounds = { ...limits, requestMs }
     const token = await tokens?.token()
-    let answer = await exchange(send, withToken(ask, token), limits, now)
+    let answer = await exchange(send, withToken(ask, token), bounds, now)
     if (answer.status === 401 && tokens && token !== undefined) {
       tokens.forget(token)
-      answer = await exchange(send, withToken(ask, await tokens.token()), limits, now)
+      answer = await exchange(send, withToken(ask, await tokens.token()), bounds, now)
     }
     if (answer.status < 200 || answer.status > 299) throw errorOf(answer)
     const parsed = fhirJson.safeParse(answer.body)
@@ -99,19 +102,19 @@ export function createEhrClient(settings: EhrSettings, parts: EhrClientParts = {
         signal,
         ...(typeof body === 'string' ? { body } : {}),
       }
-      return breaker.run(() => withRetries(() => once(ask), limits, { now, random }, signal, deadline))
+      return breaker.run(() => withRetries(budgetMs => once(ask, budgetMs), limits, { now, random }, signal, deadline))
     }
 
     async function firstPage(resourceType: string, searchParams: SearchParams, strict: boolean, post: boolean): Promise<FhirJson> {
       const headers: Record<string, string> = strict ? { prefer: 'handling=strict' } : {}
-      if (!post || refusesPost) return fhir.search({ resourceType, searchParams, options: { headers } })
+      if (!post || postSearch.state === 'refused') return fhir.search({ resourceType, searchParams, options: { headers } })
       try {
         return await fhir.search({ resourceType, searchParams, options: { headers, postSearch: true } })
       }
       catch (error) {
         if (!(error instanceof EhrUnavailable) || !['not-offered', 'not-found', 'refused'].includes(error.problem)) throw error
         const answer = await fhir.search({ resourceType, searchParams, options: { headers } })
-        refusesPost = true
+        postSearch.state = 'refused'
         return answer
       }
     }
@@ -147,7 +150,7 @@ export function createEhrClient(settings: EhrSettings, parts: EhrClientParts = {
     }
   }
 
-  return { settings, now, breaker: breaker.state, session }
+  return { settings, now, breaker: breaker.state, postSearch, session }
 }
 
 function withToken(ask: HttpAsk, token: string | undefined): HttpAsk {
@@ -155,8 +158,8 @@ function withToken(ask: HttpAsk, token: string | undefined): HttpAsk {
 }
 
 /** What an HTTP status means for the reader (R4 RESTful API, "HTTP Status Codes"). */
-function errorOf({ status, retryAfterMs }: HttpAnswer): EhrUnavailable {
-  const details = { status, retryAfterMs }
+function errorOf({ status, retryAfterMs, body }: HttpAnswer): EhrUnavailable {
+  const details = { status, retryAfterMs, inFhir: fhirJson.safeParse(body).success }
   if (status === 401) return new EhrUnavailable('not-connected', 'The hospital record did not accept this system\'s sign-in', details)
   if (status === 403) return new EhrUnavailable('refused', 'The hospital record refused access to this part', details)
   if (status === 404 || status === 410) return new EhrUnavailable('not-found', 'The hospital record has nothing at this place', details)

@@ -10,13 +10,19 @@ export class EhrUnavailable extends Error {
   readonly status: number | null
   /** Milliseconds the server asked us to wait, null where it did not say. */
   readonly retryAfterMs: number | null
+  /** Whether the refusal itself was FHIR: the server is the right one. */
+  readonly inFhir: boolean
 
-  constructor(problem: PartProblem, message: string, details: { status?: number | null, retryAfterMs?: number | null, cause?: unknown } = {}) {
+  constructor(
+    problem: PartProblem, message: string,
+    details: { status?: number | null, retryAfterMs?: number | null, inFhir?: boolean, cause?: unknown } = {},
+  ) {
     super(message, details.cause === undefined ? undefined : { cause: details.cause })
     this.name = 'EhrUnavailable'
     this.problem = problem
     this.status = details.status ?? null
     this.retryAfterMs = details.retryAfterMs ?? null
+    this.inFhir = details.inFhir ?? false
   }
 }
 

@@ -1,5 +1,6 @@
 import type { SearchParams } from 'fhir-kit-client'
 import type { LabReading } from '#shared/domain/kidney/types'
+import type { PartProblem } from '#shared/domain/record/types'
 import type { Capabilities, EhrSession } from './client'
 import { creatinineLoinc, cystatinLoinc, loincRefs, panelLoinc, tokenList } from './codes'
 import { EhrUnavailable } from './errors'
@@ -29,12 +30,13 @@ const mostFetched = 20
  */
 export async function readLaboratory(question: LaboratoryQuestion): Promise<{ rows: Rows<ObservationResource>, readings: LabReading[] }> {
   const [coded, named] = await Promise.all([readCoded(question), readNamed(question)])
-  const members = coded.looked ? await readMembers(coded.rows, question) : []
+  const members = await readMembers(coded.rows, question)
   const known = new Set(coded.rows.map(({ id }) => id))
-  const observations = [...coded.rows, ...[...members, ...named].filter(({ id }) => !known.has(id) && known.add(id))]
+  const observations = [...coded.rows, ...[...members.rows, ...named].filter(({ id }) => !known.has(id) && known.add(id))]
   const specimens = specimensOf([...coded.included, ...await readSpecimens(observations, coded.included, question)])
   const readings = observations.flatMap(observation => mapLaboratory(observation, { ...question, specimens }))
-  return { rows: coded, readings: readings.sort(newestFirst) }
+  const rows = members.problem === null ? coded : { ...coded, complete: false, problem: members.problem, words: 'Parts of a panel could not be fetched' }
+  return { rows, readings: readings.sort(newestFirst) }
 }
 
 async function readCoded(question: LaboratoryQuestion): Promise<Rows<ObservationResource>> {
@@ -75,14 +77,19 @@ async function readNamed(question: LaboratoryQuestion): Promise<ObservationResou
 }
 
 /** Parts of panels that no search brought. A panel with a creatinine already among its known parts needs none. */
-async function readMembers(observations: readonly ObservationResource[], { session, settings, patientId }: LaboratoryQuestion): Promise<ObservationResource[]> {
+async function readMembers(
+  observations: readonly ObservationResource[], { session, settings, patientId }: LaboratoryQuestion,
+): Promise<{ rows: ObservationResource[], problem: PartProblem | null }> {
   const known = new Set(observations.map(({ id }) => id))
   const missing = new Set(observations.filter(isPanel).flatMap((panel) => {
     const ids = panel.hasMember.flatMap(reference => localTarget(reference, settings) ?? []).filter(({ type }) => type === 'Observation').map(({ id }) => id)
     return ids.some(id => known.has(id)) ? [] : ids
   }))
-  const fetched = await fetchEach([...missing].map(id => ({ type: 'Observation', id })), session)
-  return fetched.flatMap(resource => asObservation(resource) ?? []).filter(({ subject }) => namesPatient(subject, patientId, settings))
+  const { resources, problem } = await fetchEach('Observation', missing, session)
+  return {
+    rows: resources.flatMap(resource => asObservation(resource) ?? []).filter(({ subject }) => namesPatient(subject, patientId, settings)),
+    problem,
+  }
 }
 
 /** Specimens of the newest results, so that urine under a serum code is noticed. */
@@ -95,20 +102,24 @@ async function readSpecimens(observations: readonly ObservationResource[], inclu
     .flatMap(observation => localTarget(observation.specimen, question.settings) ?? [])
     .filter(({ type }) => type === 'Specimen')
     .map(({ id }) => id))
-  return fetchEach([...wanted].map(id => ({ type: 'Specimen', id })), question.session)
+  // The code already says blood; a specimen that cannot be fetched takes nothing away from that.
+  return (await fetchEach('Specimen', wanted, question.session)).resources
 }
 
-async function fetchEach(targets: ReadonlyArray<{ type: string, id: string }>, session: EhrSession): Promise<FhirJson[]> {
-  const answers = await Promise.all(targets.slice(0, mostFetched).map(async ({ type, id }) => {
+async function fetchEach(type: string, ids: ReadonlySet<string>, session: EhrSession): Promise<{ resources: FhirJson[], problem: PartProblem | null }> {
+  let problem: PartProblem | null = ids.size > mostFetched ? 'cut-short' : null
+  const resources = await Promise.all([...ids].slice(0, mostFetched).map(async (id) => {
     try {
       return [await session.read(type, id)]
     }
     catch (error) {
-      if (error instanceof EhrUnavailable) return []
-      throw error
+      if (!(error instanceof EhrUnavailable)) throw error
+      // What is gone cannot be fetched by anybody.
+      if (error.problem !== 'not-found') problem = error.problem
+      return []
     }
   }))
-  return answers.flat()
+  return { resources: resources.flat(), problem }
 }
 
 function newestFirst(a: LabReading, b: LabReading): number {

@@ -128,7 +128,7 @@ async function readPatient(
     if (!(error instanceof EhrUnavailable)) throw error
     if (error.problem !== 'not-found') return failed(error.problem, error.message)
     // A wrong address answers 404 to everything: that says nothing about the patient.
-    return (await capabilities).nothingThere
+    return !error.inFhir && (await capabilities).nothingThere
       ? failed('unreachable', 'There is no FHIR server at the configured address')
       : failed('not-found', 'The hospital record has no such patient', 'none')
   }

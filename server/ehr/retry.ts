@@ -12,17 +12,18 @@ export interface RetryClock {
 }
 
 /**
- * Runs a read again after a failure that may pass: at most `tries` times and `callMs` of work. A wait the server asks for
+ * Runs a read again after a failure that may pass: at most `tries` times and `callMs` of work, of which each call is told
+ * how much it may use. A wait the server asks for
  * is kept where it ends before `deadline`; where it would not, the failure is reported at once.
  */
 export async function withRetries<T>(
-  call: () => Promise<T>, limits: EhrLimits, clock: RetryClock, signal: AbortSignal, deadline: number,
+  call: (budgetMs: number) => Promise<T>, limits: EhrLimits, clock: RetryClock, signal: AbortSignal, deadline: number,
 ): Promise<T> {
   let worked = 0
   for (let attempt = 1; ; attempt += 1) {
     const started = clock.now()
     try {
-      return await call()
+      return await call(Math.min(limits.requestMs, limits.callMs - worked))
     }
     catch (error) {
       worked += clock.now() - started

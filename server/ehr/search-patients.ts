@@ -27,9 +27,16 @@ export interface PatientQuery {
 export async function searchPatients(client: EhrClient, query: PatientQuery, options: { signal?: AbortSignal } = {}): Promise<PatientSearch> {
   const { settings } = client
   if (!query.recordNumber?.trim() && !query.name?.trim() && !query.family?.trim()) throw new RangeError('A record number or a name is needed')
-  const answer = await client.session(options.signal).search('Patient', formsOf(query, settings), { post: true })
-  const patients = answer.resources
-    .filter(resource => matches(resource, query, settings))
+  const session = client.session(options.signal)
+  const ask = async (post: boolean) => {
+    const answer = await session.search('Patient', formsOf(query, settings), { post })
+    return { answer, found: answer.resources.filter(resource => matches(resource, query, settings)) }
+  }
+  let { answer, found } = await ask(true)
+  if (found.length > 0 && client.postSearch.state === 'untried') client.postSearch.state = 'works'
+  // A server that does not read the body of a search answers as if nothing had been asked: nothing found proves nothing.
+  else if (found.length === 0 && client.postSearch.state === 'untried') ({ answer, found } = await ask(false))
+  const patients = found
     .flatMap(resource => mapPatient(resource, settings.recordNumberSystem) ?? [])
     .sort((a, b) => a.displayName.localeCompare(b.displayName) || (a.birthDate ?? '').localeCompare(b.birthDate ?? ''))
   return {

@@ -289,8 +289,19 @@ describe('a server in trouble', () => {
     expect((await read('marta-lindqvist')).readings[0]?.value).toBe(0.94)
   })
 
+  it('that cannot fetch the members of a panel is not complete', async () => {
+    await fake.control({ fault: '500', pattern: 'Observation/samuel' })
+    await fake.control({ fault: '400', pattern: 'code:text' })
+    expect((await read('samuel-adjei')).parts.laboratory).toMatchObject({ state: 'found', complete: false, words: 'Parts of a panel could not be fetched' })
+  })
+
+  it('without a capability statement still tells an unknown patient from a wrong address', async () => {
+    await fake.control({ fault: '404', pattern: 'metadata' })
+    expect((await read('nobody')).parts.patient).toMatchObject({ state: 'none', problem: 'not-found' })
+  })
+
   it('at the wrong address says nothing about the patient', async () => {
-    await fake.control({ fault: '404' })
+    await fake.control({ fault: 'notFhir' })
     expect(await read('marta-lindqvist')).toMatchObject({ state: 'unreachable', parts: { patient: { state: 'could-not-look' } } })
   })
 
