@@ -96,6 +96,9 @@ async function placeOf(dir, { make }) {
   }
   if (!make) return { place: own, fallback: false }
   const user = await postgresUser()
+  if (existsSync(join(own, 'data')) && statSync(join(own, 'data')).uid !== user.uid) {
+    throw new Failure(`${own} belongs to another user: it was not made as root. Start as that user again, or remove it to begin anew.`)
+  }
   const takeOver = (folder) => {
     mkdirSync(folder, { recursive: true })
     chmodSync(folder, 0o700)

@@ -80,7 +80,7 @@ export async function prepareTypes({ processes, buildDir, env = {} }) {
 export async function build({ processes, output, env = {}, say = () => {} }) {
   const print = fingerprint(root)
   if (isBuilt(output, print)) return false
-  say('building: under a minute')
+  say('building: about a minute')
   rmSync(output, { recursive: true, force: true })
   await processes.must('nuxt build', node, [tool('nuxt/bin/nuxt.mjs'), 'build'], { env: quietEnv({ ...process.env, ...env, NODE_ENV: 'production' }) })
   markBuilt(output, print)
