@@ -9,7 +9,8 @@ import { parseEhrSettings } from './settings'
 
 export const usage = `Usage: npm run ehr:read -- <record number or Patient/id> [--since YYYY-MM-DD] [--zone Area/City]
 
-Reads one patient from the hospital's FHIR server and prints what was found as JSON.
+Reads one patient from the hospital's FHIR server and prints what was found as JSON. To hand the JSON on to another program,
+call it with "npm run --silent", which keeps npm's own lines away.
 Settings come from the environment: NUXT_EHR_BASE_URL, NUXT_EHR_AUTH (none or backend-services), NUXT_EHR_CLIENT_ID,
 NUXT_EHR_PRIVATE_JWK, NUXT_EHR_TOKEN_URL, NUXT_EHR_SCOPE, NUXT_EHR_RECORD_NUMBER_SYSTEM, NUXT_EHR_CREATININE_CODES,
 NUXT_EHR_PAGE_ORIGINS.
