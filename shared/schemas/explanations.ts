@@ -10,7 +10,7 @@ const whole = (text: string) => /^\d+$/.test(text.trim()) ? Number(text.trim()) 
 /** The same as a plain form sends it, in three fields. A day that the month does not have is refused. */
 export const explanationFormSchema = z.object({ month: z.string(), day: z.string(), year: z.string() })
   .transform(({ month, day, year }) => {
-    const pad = (value: number, length: number) => String(value).padStart(length, '0')
-    return { birthDate: `${pad(whole(year), 4)}-${pad(whole(month), 2)}-${pad(whole(day), 2)}` }
+    const two = (value: number) => String(value).padStart(2, '0')
+    return { birthDate: `${whole(year)}-${two(whole(month))}-${two(whole(day))}` }
   })
   .pipe(explanationSchema)
