@@ -29,8 +29,9 @@ function taskList(tools: JobTools): TaskList {
   return { ...queued, 'seal-audit': sealAudit(tools), 'erase-expired': eraseExpired(tools), 'tend-queue': tendQueue(tools) }
 }
 
-/** The queue's own lines, from warnings on: the jobs write theirs themselves. */
-const logger = new Logger(() => (level, message) => {
+/** The queue's own lines, from warnings on, but those on a job: each job writes its own, without a stack. */
+const logger = new Logger(() => (level, message, meta) => {
+  if (meta && 'job' in meta) return
   if (level === 'error') log.error({ queue: message }, 'job queue')
   else if (level === 'warning') log.warn({ queue: message }, 'job queue')
 })
@@ -42,5 +43,16 @@ const logger = new Logger(() => (level, message) => {
  * @param pool connects as the role that owns the queue.
  */
 export async function startWorker({ pool, tools }: { pool: NonNullable<RunnerOptions['pgPool']>, tools: JobTools }): Promise<Runner> {
-  return await run({ pgPool: pool, taskList: taskList(tools), crontab, concurrency, logger, noHandleSignals: true, gracefulShutdownAbortTimeout: 5_000 })
+  return await run({
+    pgPool: pool,
+    taskList: taskList(tools),
+    crontab,
+    concurrency,
+    logger,
+    noHandleSignals: true,
+    gracefulShutdownAbortTimeout: 5_000,
+    // Batched even if by one: only so does stopping wait for the last results to be written, and a lost database end the worker
+    // instead of the process.
+    preset: { worker: { completeJobBatchDelay: 0, failJobBatchDelay: 0 } },
+  })
 }

@@ -13,10 +13,13 @@ import type { EhrClient } from '#server/ehr/client'
 import type { ServiceContext } from '#server/services/context'
 import { registerPool } from '#server/services/transaction'
 import { createTestDatabase } from './database'
+import type { TestDatabase } from './database'
 
 /** A department in a database of its own, with one person of each role, for tests of services. */
 export interface TestDepartment {
   db: Database
+  /** The addresses of its database, for those who connect by themselves. */
+  database: TestDatabase
   ownPractice: string
   otherPractice: string
   people: Record<Role | 'colleague' | 'preparer' | 'stranger' | 'secondRadiologist', Actor>
@@ -100,6 +103,7 @@ export async function createTestDepartment(): Promise<TestDepartment> {
   }
   return {
     db,
+    database,
     ownPractice: own.id,
     otherPractice: other.id,
     people,

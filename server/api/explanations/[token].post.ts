@@ -1,5 +1,5 @@
+import { explanationSchema } from '#shared/schemas/explanations'
 import { linkParams } from '#shared/schemas/letters'
-import { birthDateSchema } from '#shared/schemas/people'
 import { openExplanation } from '#server/services/explanation/open-explanation'
 import { readExplanation } from '#server/services/explanation/read-explanation'
 import { useApp } from '#server/utils/app'
@@ -12,7 +12,7 @@ import { limitRate } from '#server/utils/rate-limit'
 export default definePublicHandler('patient', async ({ event, ctx }) => {
   const { token } = parseParams(event, linkParams)
   await limitRate('link', clientAddress(event, useApp().config.trustedProxies))
-  const { birthDate } = await parseInput(event, birthDateSchema)
+  const { birthDate } = await parseInput(event, explanationSchema)
   const { visit } = await openExplanation({ ctx, input: { token, birthDate } })
   sendVisit(event, visit)
   return await readExplanation({ ctx, input: { visit } })

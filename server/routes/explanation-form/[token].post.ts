@@ -1,5 +1,6 @@
 import { readRawBody, sendRedirect } from 'h3'
-import { birthDateFormSchema, linkParams } from '#shared/schemas/letters'
+import { explanationFormSchema } from '#shared/schemas/explanations'
+import { linkParams } from '#shared/schemas/letters'
 import { TooMany } from '#server/services/errors'
 import { ExplanationClosed, WrongBirthDate } from '#server/services/explanation/closed'
 import { openExplanation } from '#server/services/explanation/open-explanation'
@@ -26,7 +27,7 @@ export default definePublicHandler('patient', async ({ event, ctx }) => {
   const back = (refused: Refused) => sendRedirect(event, `/explanation/${encodeURIComponent(token)}?refused=${refused}`, 303)
   try {
     await limitRate('link', clientAddress(event, useApp().config.trustedProxies))
-    const form = birthDateFormSchema.safeParse(Object.fromEntries(new URLSearchParams((await readRawBody(event)) ?? '')))
+    const form = explanationFormSchema.safeParse(Object.fromEntries(new URLSearchParams((await readRawBody(event)) ?? '')))
     if (!form.success) return await back('wrong')
     const { visit } = await openExplanation({ ctx, input: { token, birthDate: form.data.birthDate } })
     sendVisit(event, visit)

@@ -28,7 +28,7 @@ export const validBodies: Record<string, object> = {
   },
   'POST /api/requests/[id]/needs': { kind: 'creatinine', state: 'arranged', note: '' },
   'PUT /api/requests/[id]/consent': { detailsByEmail: true, email: null },
-  'POST /api/requests/[id]/letter-handover': { how: 'paper' },
+  'POST /api/requests/[id]/letter-handover': {},
   'POST /api/users': { name: 'New Person', email: 'new.person@northshore.example', role: 'scheduler', maySign: false, guidanceLead: false, practiceIds: [] },
   'PUT /api/users/[id]': { name: 'Ruth Adler', role: 'administrator', maySign: false, guidanceLead: false, practiceIds: [], disabled: false },
   'POST /api/practices': { name: 'Lakeside Clinic', phone: '', disabled: false },
