@@ -1,5 +1,5 @@
 import type { GadoliniumExposure } from '#shared/domain/safety/types'
-import type { EhrSession } from './client'
+import type { Capabilities, EhrSession } from './client'
 import { EhrUnavailable } from './errors'
 import { gadoliniumOf } from './gadolinium'
 import { mapExposures, medicationReferenceOf } from './map-exposures'
@@ -20,7 +20,7 @@ export interface ReadExposures {
 
 /** Earlier gadolinium doses, from medicines given and from procedures. */
 export async function readExposures(
-  question: { session: EhrSession, settings: EhrSettings, patientId: string, zone: string }, now: string,
+  question: { session: EhrSession, settings: EhrSettings, patientId: string, zone: string, capabilities: Promise<Capabilities | null> }, now: string,
 ): Promise<ReadExposures> {
   const { patientId, settings, zone } = question
   const page = { _count: settings.limits.pageSize }

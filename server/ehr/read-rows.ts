@@ -28,6 +28,8 @@ export interface RowQuestion<T> {
   settings: EhrSettings
   patientId: string
   resourceType: string
+  /** What the server says it offers. */
+  capabilities: Promise<Capabilities | null>
   forms: readonly SearchParams[]
   parse: z.ZodType<T>
   owner: (row: T) => Reference | undefined
@@ -54,7 +56,9 @@ export async function readRows<T>(question: RowQuestion<T>): Promise<Rows<T>> {
     }
   }
   catch (error) {
-    return failedRows(error)
+    const failed = failedRows<T>(error)
+    const offered = failed.problem === 'not-offered' && (await question.capabilities)?.types.has(resourceType)
+    return offered ? { ...failed, problem: 'refused', words: 'The hospital record offers this part, but did not answer for it' } : failed
   }
 }
 
@@ -85,10 +89,6 @@ export function joinRows<T extends { id: string }>(first: Rows<T>, second: Rows<
     unreadable: first.unreadable + second.unreadable,
   }
 }
-
-/** Whether the server says outright that it lacks a type. */
-export const lacks = (capabilities: Capabilities | null, resourceType: string): boolean =>
-  capabilities !== null && capabilities.types.size > 0 && !capabilities.types.has(resourceType)
 
 /** The same question in the forms servers understand, from the most to the least precise. */
 export function patientForms(patientId: string, filters: SearchParams, extras: SearchParams): SearchParams[] {

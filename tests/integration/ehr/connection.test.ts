@@ -5,7 +5,7 @@ import { readRecord } from '#server/ehr/read-record'
 import { searchPatients } from '#server/ehr/search-patients'
 import { startFhirFake, type FhirFake } from '../../support/fhir-fake'
 
-const quick = { requestMs: 400, callMs: 800, readingMs: 3_000, tries: 1 }
+const quick = { tries: 1 }
 const now = '2026-12-01T13:00:00.000Z'
 const options = { since: null, zone: 'UTC', now }
 
@@ -103,7 +103,7 @@ describe.each(['ES384', 'RS384'] as const)('backend services with %s', (algorith
   })
 
   it('signs in anew, once, when the token runs out between two pages', async () => {
-    const client = createEhrClient(fake.settings({ ...quick, readingMs: 8_000 }))
+    const client = createEhrClient(fake.settings(quick))
     await fake.control({ quirks: { smallPages: 9 } })
     await fake.control({ fault: 'expiredToken', pattern: '_page=', count: 1, skip: 1 })
     const reading = await readRecord(client, 'beatrice-lang', options)

@@ -3,7 +3,7 @@ import { createEhrClient } from '#server/ehr/client'
 import { searchPatients, type PatientQuery } from '#server/ehr/search-patients'
 import { startFhirFake, type FhirFake } from '../../support/fhir-fake'
 
-const quick = { requestMs: 400, callMs: 1_000, readingMs: 3_000, tries: 2 }
+const quick = { tries: 2 }
 
 let fake: FhirFake
 beforeAll(async () => {
