@@ -4,6 +4,7 @@ import { decidableOutcomes, isIntravenous, usesContrast } from '#shared/domain/c
 import type { DecidableOutcome } from '#shared/domain/contrast/outcome'
 import { agentIds } from '#shared/domain/contrast/types'
 import type { AgentId } from '#shared/domain/contrast/types'
+import type { DiffersCause } from '#shared/domain/request/differs'
 import type { RequestView } from '#shared/types/views'
 import { instantOf, localOf } from '~/composables/use-preparation-words'
 
@@ -20,6 +21,7 @@ export function givenFields(view: Signed, zone: string, now: string) {
     lot: administration?.lot ?? '',
     date: localOf(start, zone).date as string | null,
     time: localOf(start, zone).time,
+    differsCause: (administration?.differsCause ?? null) as DiffersCause | null,
     differsReason: administration?.differsReason ?? '',
     reaction: administration?.reaction ?? 'none',
     reactionDetail: administration?.reactionDetail ?? '',
@@ -57,7 +59,7 @@ export function usePreparationGiven(view: Signed, zone: string, now: string) {
   function body() {
     const at = instantOf(fields.date, fields.time, zone)
     const { date: _date, time: _time, ...rest } = fields
-    return { at, value: { ...rest, differsReason: differs.value ? fields.differsReason : '', givenAt: at.ok ? at.instant : '' } }
+    return { at, value: { ...rest, differsCause: differs.value ? fields.differsCause : null, differsReason: differs.value ? fields.differsReason : '', givenAt: at.ok ? at.instant : '' } }
   }
 
   return { fields, used, differs, amountMmol, chooseContrast, chooseAgent, body }

@@ -3,6 +3,7 @@ import { needKinds, needStates } from '../domain/assessment/needs'
 import { contrastOutcomes, decidableOutcomes } from '../domain/contrast/outcome'
 import { agentIds } from '../domain/contrast/types'
 import { observationStatuses } from '../domain/kidney/types'
+import { differsCauses } from '../domain/request/differs'
 import { priorities } from '../domain/request/priority'
 import { instant, mailAddress, optionalText, pageQuery, requiredText } from './common'
 
@@ -134,6 +135,7 @@ export const administrationSchema = z.strictObject({
   volumeMl: z.number().positive('Give the volume in mL.').max(100, 'At most 100 mL.').nullable(),
   lot: optionalText(60),
   givenAt: instant,
+  differsCause: z.enum(differsCauses, { error: 'Choose why it differed.' }).nullable(),
   differsReason: optionalText(500),
   reaction: z.enum(['none', 'mild', 'moderate', 'severe']),
   reactionDetail: optionalText(1000),

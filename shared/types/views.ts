@@ -10,6 +10,7 @@ import type { Letter } from '../domain/letter/types'
 import type { LetterKind, LetterState } from '../domain/letter/kinds'
 import type { Policy } from '../domain/policy/types'
 import type { RecordReading, PatientSearch, ConnectionReport } from '../domain/record/types'
+import type { DiffersCause } from '../domain/request/differs'
 import type { RequestForm } from '../domain/request/form'
 import type { MessageKind } from '../domain/request/messages'
 import type { RequestState, Side } from '../domain/request/lifecycle'
@@ -130,6 +131,7 @@ export interface AdministrationView {
   amountMmol: number | null
   lot: string
   givenAt: string
+  differsCause: DiffersCause | null
   differsReason: string
   reaction: 'none' | 'mild' | 'moderate' | 'severe'
   reactionDetail: string

@@ -48,7 +48,7 @@ export async function doneExam(department: TestDepartment, patient: ExamPatient 
   const done = await recordGiven({
     ctx: department.as(department.people.scheduler),
     input: {
-      id: booked.id, version: booked.version, contrast: 'iv-with-and-without', agent: 'gadobutrol', volumeMl: 7.4, lot: '', givenAt: new Date().toISOString(), differsReason: '',
+      id: booked.id, version: booked.version, contrast: 'iv-with-and-without', agent: 'gadobutrol', volumeMl: 7.4, lot: '', givenAt: new Date().toISOString(), differsCause: null, differsReason: '',
       reaction: 'none', reactionDetail: '', extravasation: false,
     },
   })

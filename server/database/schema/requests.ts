@@ -11,6 +11,7 @@ import { agentIds } from '../../../shared/domain/contrast/types'
 import type { Letter } from '../../../shared/domain/letter/types'
 import { letterKinds, letterStates } from '../../../shared/domain/letter/kinds'
 import type { RecordReading } from '../../../shared/domain/record/types'
+import { differsCauses } from '../../../shared/domain/request/differs'
 import type { RequestForm } from '../../../shared/domain/request/form'
 import { requestStates, sides } from '../../../shared/domain/request/lifecycle'
 import { messageKinds } from '../../../shared/domain/request/messages'
@@ -29,6 +30,7 @@ export const needKindEnum = pgEnum('need_kind', needKinds)
 export const needStateEnum = pgEnum('need_state', needStates)
 export const messageKindEnum = pgEnum('message_kind', messageKinds)
 export const decisionKindEnum = pgEnum('decision_kind', ['approved', 'declined'])
+export const differsCauseEnum = pgEnum('differs_cause', differsCauses)
 export const letterKindEnum = pgEnum('letter_kind', letterKinds)
 export const letterStateEnum = pgEnum('letter_state', letterStates)
 export const assessmentCauseEnum = pgEnum('assessment_cause', ['send', 'answer', 'decision', 'booking', 'reopen'])
@@ -212,8 +214,9 @@ export const administrations = pgTable('administrations', {
   amountMmol: doublePrecision('amount_mmol'),
   lot: text('lot').notNull().default(''),
   givenAt: at('given_at').notNull(),
-  /** Why it differed from the decision (refused, IV failed, …), empty where it did not. */
+  /** Why it differed from the decision: for staff in words, for the patient by its cause. Empty and null where it did not. */
   differsReason: text('differs_reason').notNull().default(''),
+  differsCause: differsCauseEnum('differs_cause'),
   reaction: text('reaction').notNull().default('none'),
   reactionDetail: text('reaction_detail').notNull().default(''),
   extravasation: boolean('extravasation').notNull().default(false),

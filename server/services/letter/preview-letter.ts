@@ -50,7 +50,7 @@ async function afterLetter(db: Database, requestId: string): Promise<LetterReque
   return {
     kind: 'after',
     given: {
-      contrast: given.contrast, agentId: given.agent, differsReason: given.differsReason || null, reaction: given.reaction !== 'none', extravasation: given.extravasation,
+      contrast: given.contrast, agentId: given.agent, differsCause: given.differsCause, reaction: given.reaction !== 'none', extravasation: given.extravasation,
     },
   }
 }

@@ -6,6 +6,7 @@ import type { DecidableOutcome } from '#shared/domain/contrast/outcome'
 import type { AgentId } from '#shared/domain/contrast/types'
 import { composeLetter } from '#shared/domain/letter/compose'
 import type { LetterAgent } from '#shared/domain/letter/compose'
+import type { DiffersCause } from '#shared/domain/request/differs'
 import type { Letter } from '#shared/domain/letter/types'
 import type { Database } from '#server/database/client'
 import { letterLinks, letters } from '#server/database/schema/requests'
@@ -19,7 +20,7 @@ import type { LoadedRequest } from '../request/load'
 import type { RulesInForce } from '../rules/in-force'
 
 /** What was given, as the record of the exam says. */
-interface Given { contrast: DecidableOutcome, agentId: AgentId | null, differsReason: string | null, reaction: boolean, extravasation: boolean }
+interface Given { contrast: DecidableOutcome, agentId: AgentId | null, differsCause: DiffersCause | null, reaction: boolean, extravasation: boolean }
 
 export type LetterRequest =
   | { kind: 'before' }

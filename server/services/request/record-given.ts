@@ -33,7 +33,8 @@ export async function recordGiven({ ctx, input }: { ctx: ServiceContext, input: 
       if (new Date(input.givenAt).getTime() > ctx.now.getTime() + 5 * 60_000) problems.push({ path: 'givenAt', message: 'That time has not come yet.' })
       if (given && input.volumeMl === null) problems.push({ path: 'volumeMl', message: 'Give the volume in mL.' })
       const differs = input.contrast !== decision.contrast || (given && input.agent !== decision.agent)
-      if (differs && !input.differsReason) problems.push({ path: 'differsReason', message: 'It differs from what was signed: say why.' })
+      if (differs && !input.differsCause) problems.push({ path: 'differsCause', message: 'It differs from what was signed: say why.' })
+      if (input.differsCause === 'other' && !input.differsReason) problems.push({ path: 'differsReason', message: 'Say what the reason was.' })
       if (problems.length > 0) throw new Invalid(problems)
 
       const [earlier] = await tx.select().from(administrations).where(eq(administrations.requestId, request.id)).orderBy(desc(administrations.recordedAt)).limit(1)
@@ -51,6 +52,7 @@ export async function recordGiven({ ctx, input }: { ctx: ServiceContext, input: 
         lot: input.lot,
         givenAt: new Date(input.givenAt),
         differsReason: input.differsReason,
+        differsCause: differs ? input.differsCause : null,
         reaction: input.reaction,
         reactionDetail: input.reactionDetail,
         extravasation: input.extravasation,
@@ -65,7 +67,7 @@ export async function recordGiven({ ctx, input }: { ctx: ServiceContext, input: 
         letter: {
           kind: 'after',
           given: {
-            contrast: input.contrast, agentId: input.agent, differsReason: input.differsReason || null,
+            contrast: input.contrast, agentId: input.agent, differsCause: differs ? input.differsCause : null,
             reaction: input.reaction !== 'none', extravasation: input.extravasation,
           },
         },

@@ -208,6 +208,7 @@ async function loadAdministration(db: Database, requestId: string): Promise<Admi
     amountMmol: row.amountMmol,
     lot: row.lot,
     givenAt: row.givenAt.toISOString(),
+    differsCause: row.differsCause,
     differsReason: row.differsReason,
     reaction: row.reaction === 'mild' || row.reaction === 'moderate' || row.reaction === 'severe' ? row.reaction : 'none',
     reactionDetail: row.reactionDetail,

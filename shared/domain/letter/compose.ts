@@ -5,6 +5,8 @@ import type { Need } from '../assessment/needs'
 import type { AssessedPatient } from '../assessment/types'
 import type { DecidableOutcome } from '../contrast/outcome'
 import type { Policy } from '../policy/types'
+import type { DiffersCause } from '../request/differs'
+import { differsWords } from '../request/differs'
 import { usesContrast } from '../contrast/outcome'
 import { ageBounds } from '../safety/age'
 import { pregnancyAsked } from '../safety/pregnancy'
@@ -20,8 +22,8 @@ export interface LetterAgent { name: string, macrocyclic: boolean }
 export interface LetterGiven {
   contrast: DecidableOutcome
   agent: LetterAgent | null
-  /** Why it differed from the plan, as the team wrote it; null where it did not differ. */
-  differsReason: string | null
+  /** Why it differed from the plan; null where it did not. */
+  differsCause: DiffersCause | null
   reaction: boolean
   extravasation: boolean
 }
@@ -114,7 +116,7 @@ function afterLetter(input: Common, given: LetterGiven): Letter {
   const used = usesContrast(given.contrast)
   const breastfeeding = input.assessment.findings.filter(found => found.topic === 'breastfeeding').map(found => found.plain)
   return frame(input, 'after', given.contrast, used ? `Contrast was used in your ${scan}, and here is why` : `No contrast was used in your ${scan}`, {
-    opening: given.differsReason === null
+    opening: given.differsCause === null
       ? whyParagraphs(input.assessment, given.contrast)
       : ['The scan was done in another way than planned.'],
     sections: [
@@ -131,10 +133,7 @@ function usedSection(given: LetterGiven, used: boolean): LetterSection {
     ? `The contrast was given into ${given.contrast === 'intra-articular' ? 'the joint' : 'a vein'}.`
     : 'The scan was done without contrast. Nothing was injected.']
   if (used && given.agent !== null) paragraphs.push(`Its name is ${given.agent.name}. Keep this name with your papers.`)
-  if (given.differsReason !== null) {
-    if (given.differsReason.trim() !== '') paragraphs.push(`The team wrote this reason: ${given.differsReason.trim()}`)
-    paragraphs.push('Call us if you want to know more.')
-  }
+  if (given.differsCause !== null) paragraphs.push(differsWords[given.differsCause].plain, 'Call us if you want to know more.')
   if (given.reaction) paragraphs.push('You had a reaction. Please tell any scan team about it before you get contrast again.')
   if (given.extravasation) paragraphs.push('Some of the fluid went under the skin. Keep the arm raised today. Call us if it hurts more, swells or feels numb.')
   return { id: 'used', heading: 'What was used', paragraphs, items: [] }

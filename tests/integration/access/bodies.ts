@@ -24,7 +24,7 @@ export const validBodies: Record<string, object> = {
   'POST /api/requests/[id]/booking-release': { cause: 'moved-by-us', note: '' },
   'POST /api/requests/[id]/refusal': { reason: 'The patient does not want it.' },
   'POST /api/requests/[id]/administration': {
-    contrast: 'none', agent: null, volumeMl: null, lot: '', givenAt: '2026-01-07T15:00:00Z', differsReason: '', reaction: 'none', reactionDetail: '', extravasation: false,
+    contrast: 'none', agent: null, volumeMl: null, lot: '', givenAt: '2026-01-07T15:00:00Z', differsCause: null, differsReason: '', reaction: 'none', reactionDetail: '', extravasation: false,
   },
   'POST /api/requests/[id]/needs': { kind: 'creatinine', state: 'arranged', note: '' },
   'PUT /api/requests/[id]/consent': { detailsByEmail: true, email: null },

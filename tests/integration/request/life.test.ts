@@ -253,7 +253,7 @@ describe('preparation', () => {
   it('records what was given, keeps corrections beside it and feeds the patient\'s next assessment', async () => {
     const request = await booked(new Date(Date.now() + 50 * 3_600_000).toISOString())
     const given = {
-      contrast: 'iv-with-and-without', agent: 'gadobutrol', volumeMl: 7.4, lot: 'L1', givenAt: new Date().toISOString(), differsReason: '',
+      contrast: 'iv-with-and-without', agent: 'gadobutrol', volumeMl: 7.4, lot: 'L1', givenAt: new Date().toISOString(), differsCause: null, differsReason: '',
       reaction: 'none', reactionDetail: '', extravasation: false,
     } as const
     const done = await recordGiven({ ctx: department.as(department.people.scheduler), input: { ...request, ...given } })
@@ -274,10 +274,14 @@ describe('preparation', () => {
   it('asks why when something else was given than signed', async () => {
     const request = await booked(new Date(Date.now() + 60 * 3_600_000).toISOString())
     const input = {
-      ...request, contrast: 'none', agent: null, volumeMl: null, lot: '', givenAt: new Date().toISOString(), differsReason: '', reaction: 'none', reactionDetail: '', extravasation: false,
+      ...request, contrast: 'none', agent: null, volumeMl: null, lot: '', givenAt: new Date().toISOString(), differsCause: null, differsReason: '', reaction: 'none', reactionDetail: '', extravasation: false,
     } as const
     const error = await recordGiven({ ctx: department.as(department.people.scheduler), input }).catch((caught: unknown) => caught)
-    expect(error instanceof Invalid && error.problems).toEqual([expect.objectContaining({ path: 'differsReason' })])
+    expect(error instanceof Invalid && error.problems).toEqual([expect.objectContaining({ path: 'differsCause' })])
+    await recordGiven({ ctx: department.as(department.people.scheduler), input: { ...input, differsCause: 'iv-failed', differsReason: 'CANARY for staff only' } })
+    const [letter] = await department.db.select().from(letters).where(and(eq(letters.requestId, request.id), eq(letters.kind, 'after')))
+    expect(JSON.stringify(letter?.content)).toContain('We could not place the small tube')
+    expect(JSON.stringify(letter?.content)).not.toContain('CANARY')
   })
 })
 

@@ -5,7 +5,7 @@ import { quietScreening } from '../safety/situation'
 import { creatinine } from '../assessment/request-inputs'
 import { bodyOf, common, gadobutrol, slot } from './letter-inputs'
 
-const usual = { contrast: 'iv-with-and-without', agent: gadobutrol, differsReason: null, reaction: false, extravasation: false } as const
+const usual = { contrast: 'iv-with-and-without', agent: gadobutrol, differsCause: null, reaction: false, extravasation: false } as const
 
 describe('the letter before the scan', () => {
   const letter = composeLetter({ kind: 'before', slot, ...common('iv-with-and-without') })
@@ -93,10 +93,10 @@ describe('the letter after the scan', () => {
     expect(letter.sections.map(section => section.id)).not.toContain('warning-signs')
   })
 
-  it('gives the team\'s reason where it differed from the plan', () => {
-    const letter = composeLetter({ kind: 'after', given: { ...usual, contrast: 'none', agent: null, differsReason: 'No vein could be found.' }, ...common('iv-with-and-without') })
+  it('gives the reason in plain words where it differed from the plan', () => {
+    const letter = composeLetter({ kind: 'after', given: { ...usual, contrast: 'none', agent: null, differsCause: 'iv-failed' }, ...common('iv-with-and-without') })
     expect(letter.opening).toEqual(['The scan was done in another way than planned.'])
-    expect(bodyOf(letter)).toContain('The team wrote this reason: No vein could be found.')
+    expect(bodyOf(letter)).toContain('We could not place the small tube in a vein.')
   })
 
   it('tells of a reaction and of fluid under the skin', () => {

@@ -9,6 +9,7 @@ import { composeLetter, composeNeutral } from '#shared/domain/letter/compose'
 import { countText, fleschKincaidGrade, readingGradeCeiling, smogGrade } from '#shared/domain/letter/readability'
 import type { Letter } from '#shared/domain/letter/types'
 import { starterPolicy } from '#shared/domain/policy/defaults'
+import { differsCauses } from '#shared/domain/request/differs'
 import { quietScreening } from '../safety/situation'
 import { bodyOf, common, gadobutrol, linesOf, slot } from './letter-inputs'
 
@@ -28,11 +29,11 @@ const situations: Record<string, Partial<AssessmentInputs>> = {
 
 function lettersFor(contrast: DecidableOutcome, inputs: Partial<AssessmentInputs>, region: string): Letter[] {
   const part = common(contrast, inputs, region)
-  const given = { contrast, agent: usesContrast(contrast) ? gadobutrol : null, differsReason: null, reaction: false, extravasation: false }
+  const given = { contrast, agent: usesContrast(contrast) ? gadobutrol : null, differsCause: null, reaction: false, extravasation: false }
   return [
     composeLetter({ kind: 'before', slot, ...part }),
     composeLetter({ kind: 'after', given, ...part }),
-    composeLetter({ kind: 'after', given: { ...given, differsReason: '', reaction: true, extravasation: true }, ...part }),
+    ...differsCauses.map(differsCause => composeLetter({ kind: 'after', given: { ...given, differsCause, reaction: true, extravasation: true }, ...part })),
     composeLetter({ kind: 'changed', change: 'moved', slot, ...part }),
     composeLetter({ kind: 'changed', change: 'replanned', slot, ...part }),
     composeLetter({ kind: 'changed', change: 'called-off', ...part }),

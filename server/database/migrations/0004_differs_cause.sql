@@ -1,0 +1,2 @@
+CREATE TYPE "public"."differs_cause" AS ENUM('patient-declined', 'iv-failed', 'reaction', 'kidney-function', 'agent-not-at-hand', 'seen-on-images', 'scan-stopped', 'other');--> statement-breakpoint
+ALTER TABLE "administrations" ADD COLUMN "differs_cause" "differs_cause";
