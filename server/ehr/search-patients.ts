@@ -6,7 +6,7 @@ import { mapPatient, nameWords, recordNumbers, words } from './map-patient'
 import type { FhirJson } from './resources'
 import type { EhrSettings } from './settings'
 
-/** What is known about the person looked for; at least a record number or a name. Every given field must fit. */
+/** What is known about the person looked for; at least a record number, a name or a date of birth. Every given field must fit. */
 export interface PatientQuery {
   recordNumber?: string
   /** Any part of the name, as typed: "lindqvist marta". */
@@ -22,11 +22,13 @@ export interface PatientQuery {
  * know, so every row is checked again here. Nobody is picked: with several, a person chooses.
  *
  * @throws EhrUnavailable where the server could not be asked
- * @throws RangeError where neither a record number nor a name is given
+ * @throws RangeError where neither a record number nor a name nor a date of birth is given
  */
 export async function searchPatients(client: EhrClient, query: PatientQuery, options: { signal?: AbortSignal } = {}): Promise<PatientSearch> {
   const { settings } = client
-  if (!query.recordNumber?.trim() && !query.name?.trim() && !query.family?.trim()) throw new RangeError('A record number or a name is needed')
+  if (!query.recordNumber?.trim() && !query.name?.trim() && !query.family?.trim() && !query.birthDate) {
+    throw new RangeError('A record number, a name or a date of birth is needed')
+  }
   const session = client.session(options.signal)
   const ask = async (post: boolean) => {
     const answer = await session.search('Patient', formsOf(query, settings), { post })

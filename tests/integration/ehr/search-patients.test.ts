@@ -84,6 +84,12 @@ describe('a patient search', () => {
   })
 
   it('asks for something to look for', async () => {
-    await expect(search({ birthDate: '1965-11-08' })).rejects.toThrow(RangeError)
+    await expect(search({ name: '  ' })).rejects.toThrow(RangeError)
+  })
+
+  it('finds everybody born on a day', async () => {
+    const answer = await search({ birthDate: '1965-11-08' })
+    expect(answer.patients.map(patient => patient.displayName)).toContain('Marta Lindqvist')
+    expect(answer.patients.every(patient => patient.birthDate === '1965-11-08')).toBe(true)
   })
 })
