@@ -49,7 +49,3 @@ function isSignIn(path: string): boolean {
 function isPatientForm(path: string): boolean {
   return path.startsWith('/explanation-form/')
 }
-
-function isPatientForm(path: string): boolean {
-  return path.startsWith('/explanation-form/')
-}

@@ -13,7 +13,7 @@ export function assertDemoStaysHome(origin: string, listensOn: string | undefine
 
 /** A secret that somebody typed or copied out of a manual protects nothing. @throws Error */
 export function assertSecretIsRandom(secret: string): void {
-  if (new Set(secret).size < 16 || /secret|change|default|example|password/i.test(secret)) {
+  if (new Set(secret).size < 12 || /secret|change|default|example|password/i.test(secret)) {
     throw new Error('Wherefore cannot start. NUXT_AUTH_SECRET does not look random; make one with: openssl rand -base64 48')
   }
 }

@@ -2,7 +2,4 @@ import { readConnections } from '#server/services/connection/read-connections'
 import { useApp } from '#server/utils/app'
 import { defineAuthedHandler } from '#server/utils/define-authed-handler'
 
-export default defineAuthedHandler('connection.read', ({ ctx }) => {
-  const { config } = useApp()
-  return readConnections({ ctx, input: { mail: config.smtp, ehrAddress: config.ehr.baseUrl } })
-})
+export default defineAuthedHandler('connection.read', ({ ctx }) => readConnections({ ctx, input: { mail: useApp().config.smtp } }))

@@ -19,7 +19,7 @@ const mailWaitMs = 4_000
 /** Asks each part that Wherefore depends on how it is, all at once, each within a short wait. Nothing in it is secret. */
 export async function readConnections({ ctx, input }: {
   ctx: ServiceContext
-  input: { mail: MailServer, ehrAddress: string }
+  input: { mail: MailServer }
 }): Promise<ConnectionsView> {
   const [ehr, mail, queue, database] = await Promise.all([
     checkConnection(ctx.ehr, { now: ctx.now.toISOString() }),
@@ -27,7 +27,7 @@ export async function readConnections({ ctx, input }: {
     readQueue(ctx.db),
     readDatabase(ctx.db),
   ])
-  return { checkedAt: ctx.now.toISOString(), ehr: { ...ehr, address: URL.canParse(input.ehrAddress) ? new URL(input.ehrAddress).host : '' }, mail, queue, database }
+  return { checkedAt: ctx.now.toISOString(), ehr: { ...ehr, address: ctx.ehr ? new URL(ctx.ehr.settings.baseUrl).host : '' }, mail, queue, database }
 }
 
 async function checkMail({ host, port, user, password, tls }: MailServer): Promise<ConnectionsView['mail']> {

@@ -11,8 +11,8 @@ const disguises: Record<string, string> = { 0: 'o', 1: 'l', 3: 'e', 4: 'a', 5: '
 const rows = ['abcdefghijklmnopqrstuvwxyz', '01234567890', 'qwertyuiop', 'asdfghjkl', 'zxcvbnm', 'qazwsxedcrfvtgbyhnujmikolp', '1qaz2wsx3edc4rfv5tgb6yhn']
 const runs = rows.flatMap(row => [row, [...row].reverse().join('')])
 
-/** Fewer letters than this, beyond the words and runs on every list, are guessed at once. */
-const leastOwnLetters = 5
+/** Fewer letters and digits than this, beyond the words and runs on every list, are guessed at once. */
+const leastOwn = 5
 
 /**
  * Why a new password is too easy to guess, in words for the person who chose it; null where it is not. Any character may be in
@@ -25,7 +25,7 @@ export function judgePassword(password: string, owner: PasswordOwner): string | 
   const theirs = ownWords(owner).find(word => plain.includes(word))
   if (theirs) return 'This holds your name, your address, the department or this program\'s name: guessers try those first. Choose other words.'
   if (new Set(plain).size < 6 || isRepeated(plain)) return 'This repeats itself, which guessers try first. Choose different words.'
-  if (ownLetters(plain) < leastOwnLetters && ownLetters(undisguised(plain)) < leastOwnLetters) {
+  if (ownCharacters(plain) < leastOwn || ownCharacters(undisguised(plain)) < leastOwn) {
     return 'This is made of words and runs of keys that are on every guesser\'s list. Add words of your own.'
   }
   return null
@@ -48,12 +48,12 @@ function undisguised(text: string): string {
   return text.replace(/[0134570@$!]/g, sign => disguises[sign] ?? sign)
 }
 
-/** Counts the letters left when listed words, runs of neighbouring keys, digits and signs are taken out. */
-function ownLetters(text: string): number {
+/** Counts the letters and digits left when listed words, years and runs of neighboring keys are taken out. */
+function ownCharacters(text: string): number {
   let rest = text
   for (const word of commonWords) rest = rest.replaceAll(word, ' ')
-  rest = withoutRuns(rest)
-  return rest.replace(/[^\p{L}]/gu, '').length
+  rest = withoutRuns(rest).replace(/(?:19|20)\d\d/g, ' ')
+  return rest.replace(/[^\p{L}\p{N}]/gu, '').length
 }
 
 function withoutRuns(text: string): string {
