@@ -94,7 +94,8 @@ export function useReviewDecision(request: Ref<RequestView | null>, rules: Ref<A
 
   watch(request, (view) => {
     if (view && !drafts.has(view.id)) drafts.set(view.id, suggestedFields(view))
-  }, { immediate: true })
+    // At once: while the server draws the page, no later moment comes, and the browser must begin from the same page.
+  }, { immediate: true, flush: 'sync' })
 
   /** Findings, agents and needs for the contrast chosen: the stored ones while it follows the suggestion. */
   const found = computed<Found | null>(() => {

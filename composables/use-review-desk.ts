@@ -32,7 +32,8 @@ export function useReviewDesk(done: () => Promise<unknown>) {
     dialog.value = null
     errors.clear()
     if (id !== undefined && !written.has(id)) written.set(id, { query: '', declineReason: '', helpInstead: '', message: '', reopenReason: '' })
-  }, { immediate: true })
+    // At once: while the server draws the page, no later moment comes, and the browser must begin from the same page.
+  }, { immediate: true, flush: 'sync' })
 
   function may(action: 'request.approve' | 'request.query' | 'request.decline' | 'request.undo' | 'request.reopen' | 'message.post') {
     return request.value?.may.includes(action) ?? false

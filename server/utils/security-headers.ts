@@ -1,8 +1,8 @@
-/** Everything a browser offers that no screen of ours uses. */
+/** What browsers offer and no screen of ours uses; only names that Chromium knows on every platform, since it reports others on each page. */
 const unused = [
-  'accelerometer', 'autoplay', 'bluetooth', 'camera', 'display-capture', 'encrypted-media', 'fullscreen', 'gamepad', 'geolocation',
+  'accelerometer', 'autoplay', 'camera', 'display-capture', 'encrypted-media', 'fullscreen', 'gamepad', 'geolocation',
   'gyroscope', 'hid', 'magnetometer', 'microphone', 'midi', 'payment', 'picture-in-picture', 'screen-wake-lock', 'serial', 'usb',
-  'web-share', 'xr-spatial-tracking',
+  'xr-spatial-tracking',
 ]
 
 /** Headers of every answer. Strict transport is asked for only where the public address has TLS. */
