@@ -19,7 +19,8 @@ export default defineConfig({
     viewport: { width: 1440, height: 900 },
     locale: 'en-US',
     timezoneId: 'America/New_York',
-    trace: 'retain-on-failure',
+    // A failure leaves a picture and the page's outline; recording every step of every test would double the time on two cores.
+    trace: 'off',
     screenshot: 'only-on-failure',
     launchOptions: {
       executablePath: process.env.WHEREFORE_TEST_CHROMIUM ?? '/usr/bin/chromium',
