@@ -33,6 +33,8 @@ export default {
     },
     borderRadius: { none: '0', control: '6px', choice: '8px', sheet: '10px', full: '9999px' },
     boxShadow: { none: 'none', sheet: '0 14px 34px -18px rgb(22 32 42 / 0.28)' },
+    // Else `shadow-sheet` would also color the shadow with the palette's white `sheet`.
+    boxShadowColor: {},
     extend: {},
   },
 } satisfies Config

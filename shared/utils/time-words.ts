@@ -63,3 +63,9 @@ export function birthDateWords(birthDate: string | null): string {
   if (!date.isValid) return birthDate
   return date.toFormat(birthDate.length === 10 ? 'd LLL yyyy' : birthDate.length === 7 ? 'LLL yyyy' : 'yyyy')
 }
+
+/** A span as people say it: "40 minutes", "4 hours", "2 days". */
+export function spanWords(minutes: number): string {
+  const [amount, unit] = minutes < 120 && minutes % 60 !== 0 ? [minutes, 'minute'] : minutes < 2880 ? [Math.round(minutes / 60), 'hour'] : [Math.round(minutes / 1440), 'day']
+  return `${amount} ${unit}${amount === 1 ? '' : 's'}`
+}
