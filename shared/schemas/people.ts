@@ -39,8 +39,6 @@ export const passwordSchema = z.string()
 
 export const acceptInvitationSchema = z.strictObject({ password: passwordSchema })
 
-export const birthDateSchema = z.strictObject({ birthDate: z.iso.date({ error: 'Give your date of birth as year, month and day.' }) })
-
 export const auditQuery = pageQuery.extend({
   actor: z.string().trim().max(120).optional(),
   action: z.enum(auditActions as [string, ...string[]]).optional(),

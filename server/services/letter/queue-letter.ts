@@ -69,12 +69,13 @@ export function writeLetter(ctx: Pick<ServiceContext, 'now'>, { loaded, decision
  */
 export async function queueLetter(tx: Database, ctx: ServiceContext, facts: LetterFacts): Promise<void> {
   const { request, patient } = facts.loaded
-  const content = writeLetter(ctx, facts)
+  const letter = await asHeard(tx, facts)
+  const content = writeLetter(ctx, { ...facts, letter })
   await cancelUndelivered(tx, request.id)
   const [row] = await tx.insert(letters).values({
     requestId: request.id,
     patientId: patient.id,
-    kind: facts.letter.kind,
+    kind: letter.kind,
     content,
     detailed: patient.detailsByEmail === true,
     toAddress: patient.email,
@@ -86,7 +87,7 @@ export async function queueLetter(tx: Database, ctx: ServiceContext, facts: Lett
   if (patient.email) await enqueue(tx, 'deliver-letter', { letterId: row.id }, { key: `letter-${row.id}` })
   await recordAudit(tx, ctx, {
     action: 'letter.queue', objectType: 'letter', objectId: row.id, reference: request.reference, patientId: patient.id, practiceId: request.practiceId,
-    detail: { kind: facts.letter.kind, detailed: patient.detailsByEmail === true, address: patient.email !== null },
+    detail: { kind: letter.kind, detailed: patient.detailsByEmail === true, address: patient.email !== null },
   })
 }
 
@@ -96,13 +97,7 @@ export async function queueLetter(tx: Database, ctx: ServiceContext, facts: Lett
  */
 export async function callOffLetters(tx: Database, ctx: ServiceContext, loaded: LoadedRequest): Promise<void> {
   const { request } = loaded
-  const told = await tx.select({ id: letters.id }).from(letters)
-    .where(and(
-      eq(letters.requestId, request.id),
-      // Once delivered is told, even where its link was closed afterwards.
-      or(inArray(letters.state, ['delivered', 'handed-over']), isNotNull(letters.deliveredAt)),
-      inArray(letters.kind, ['before', 'changed']),
-    ))
+  const told = await lettersHeard(tx, request.id)
   await cancelUndelivered(tx, request.id)
   await revokeLinks(tx, ctx, told.map(letter => letter.id))
   if (told.length === 0 || request.slotStartsAt === null) return
@@ -114,6 +109,21 @@ export async function callOffLetters(tx: Database, ctx: ServiceContext, loaded: 
     assessment: { inputs: assessment.row.inputs, inForce: assessment.inForce, result: assessment.row.result },
     letter: { kind: 'changed', change: 'called-off' },
   })
+}
+
+/** Letters about the plan that reached the patient. Once delivered is told, even where its link was closed afterwards. */
+async function lettersHeard(tx: Database, requestId: string): Promise<{ id: string }[]> {
+  return await tx.select({ id: letters.id }).from(letters).where(and(
+    eq(letters.requestId, requestId),
+    or(inArray(letters.state, ['delivered', 'handed-over']), isNotNull(letters.deliveredAt)),
+    inArray(letters.kind, ['before', 'changed']),
+  ))
+}
+
+/** "Has a new time" makes no sense to somebody who never heard of the old one: they get the first letter instead. */
+async function asHeard(tx: Database, { loaded, letter }: LetterFacts): Promise<LetterRequest> {
+  if (letter.kind !== 'changed' || letter.change === 'called-off') return letter
+  return (await lettersHeard(tx, loaded.request.id)).length > 0 ? letter : { kind: 'before' }
 }
 
 async function cancelUndelivered(tx: Database, requestId: string): Promise<void> {

@@ -75,5 +75,5 @@ export const starterPolicy: Policy = {
   decisionWithinMinutes: { value: { routine: 2880, urgent: 240, asap: 120, stat: 60 }, source: local, asOf },
   bookWithinDays: { value: 5, source: local, asOf },
   examMinutes: { value: { base: 30, ivStart: 10, joint: 30, liver: 20 }, source: practice, asOf },
-  links: { value: { validDays: 90, birthDateTries: 5 }, source: local, asOf },
+  links: { value: { validDays: 30, birthDateTries: 5 }, source: local, asOf },
 }
