@@ -75,13 +75,13 @@ export function createProcesses({ cwd, logs, onChange = () => {} }) {
    *
    * @param {{ url: string, timeout?: number, env?: NodeJS.ProcessEnv, show?: boolean, onCrash?: (message: string) => void }} options
    */
-  async function serve(name, command, args, { url, timeout = 60_000, onCrash, ...options }) {
+  async function serve(name, command, args, { url, timeout = 60_000, onCrash = () => {}, ...options }) {
     const program = open(name, command, args, options)
     const until = performance.now() + timeout
     while (program.result === null && performance.now() < until) {
       if ((await answers(url)) && program.result === null) {
         void program.ended.then((result) => {
-          if (!program.wanted && !closing) onCrash?.(describe(name, { ...result, log: program.log, output: textOf(program.log) }))
+          if (!program.wanted && !closing) onCrash(describe(name, { ...result, log: program.log, output: textOf(program.log) }))
         })
         return program
       }
