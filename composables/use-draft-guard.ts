@@ -1,5 +1,6 @@
 import { onBeforeUnmount, onMounted, ref, watch } from 'vue'
-import { onBeforeRouteLeave } from 'vue-router'
+import type { RouteLocationNormalized } from 'vue-router'
+import { onBeforeRouteLeave, onBeforeRouteUpdate } from 'vue-router'
 import { useRequestDraftStore } from '~/stores/request-draft'
 
 /** Saves while somebody types and holds them back from leaving with something unsaved. */
@@ -14,15 +15,16 @@ export function useDraftGuard() {
     if (now && now === before) draft.touch()
   }, { deep: true })
 
-  onBeforeRouteLeave(async (to) => {
-    if (mayLeave || !draft.view || to.path.startsWith('/requests/new')) {
-      void draft.flush()
-      return true
-    }
+  async function guard(to: RouteLocationNormalized): Promise<boolean> {
+    if (mayLeave || !draft.view) return true
+    // From step to step the draft stays open.
+    if (to.path.startsWith('/requests/new') && to.query.draft === draft.view.id) return true
     if (await draft.flush()) return true
     leavingTo.value = to.fullPath
     return false
-  })
+  }
+  onBeforeRouteLeave(guard)
+  onBeforeRouteUpdate(guard)
 
   function beforeUnload(event: BeforeUnloadEvent): void {
     if (!draft.dirty) return

@@ -10,6 +10,7 @@ import type { Sex } from '#shared/domain/kidney/types'
 import type { MissingField } from '#shared/domain/request/complete'
 import { missingForSending } from '#shared/domain/request/complete'
 import type { FormStep } from '#shared/domain/request/form'
+import { screeningWords } from '#shared/utils/screening-words'
 import { useLiveAnnouncer } from '~/composables/use-live-announcer'
 import { useRequestDraftStore } from '~/stores/request-draft'
 
@@ -29,8 +30,21 @@ export function sexOf(text: string): Sex {
   return text === 'female' || text === 'male' || text === 'other' ? text : 'unknown'
 }
 
-/** One spoken sentence for what an answer changed; null where the outcome and the radiologist's word stayed. */
+/** Names the question in the words beside it, so that a list of what is missing can be read alone. */
+export function namedField(field: MissingField, question: ClinicalQuestion | null): MissingField {
+  const [group, id] = field.path.split('.')
+  const ask = group === 'answers'
+    ? question?.deciders.find(decider => decider.id === id)?.ask
+    : group === 'screening' ? Object.entries(screeningWords).find(([name]) => name === id)?.[1].ask : undefined
+  return ask ? { path: field.path, message: `Answer “${ask}”, or say that it is not known.` } : field
+}
+
+/**
+ * What an answer changed, for the sheet, and one sentence to be spoken; null where the outcome and the radiologist's word stayed.
+ * Another question is a new beginning: its sentence alone is spoken.
+ */
 export function spokenChange(before: Assessment, after: Assessment): { texts: string[], spoken: string } | null {
+  if (before.exam?.questionId !== after.exam?.questionId) return { texts: [], spoken: `${after.sentence}.` }
   const weighty = differenceBetween(before, after).filter(change => change.kind === 'outcome' || change.kind === 'hold')
   const first = weighty[0]
   return first ? { texts: weighty.map(change => change.text), spoken: `Suggestion changed. ${first.text}.` } : null
@@ -97,6 +111,7 @@ export function useRequestForm(): RequestFormHelp {
   const asked = computed(() => draft.form?.wish?.contrast ?? draft.assessment?.suggestion ?? null)
   const missing = computed(() => (draft.form && draft.assessment && draft.rules && inputs.value
     ? missingForSending(draft.form, { question: question.value, assessment: draft.assessment, inputs: inputs.value, policy: draft.rules.policy })
+        .map(field => namedField(field, question.value))
     : []))
 
   return { question, inputs, asked, missing, missingOn: step => missing.value.filter(field => stepOf(field.path) === step), assessNow }
