@@ -230,11 +230,9 @@ async function testAll() {
 }
 
 let total = { passed: 0, failed: 1, skipped: 0 }
-let interrupted = true
 const code = await untilSignal({
   async work() {
     total = await testAll()
-    interrupted = false
     return total.failed === 0 ? 0 : 1
   },
   async close({ hurry, settled }) {
@@ -248,4 +246,5 @@ const code = await untilSignal({
   report: (error) => progress.line(`\n${error instanceof Failure ? error.message : error.stack}`),
 })
 progress.line(verdict(total))
-process.exit(interrupted ? 1 : code)
+// An interrupted run counts what it could not finish as failed.
+process.exit(total.failed > 0 ? 1 : code)
