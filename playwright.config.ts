@@ -17,6 +17,8 @@ export default defineConfig({
     ...devices['Desktop Chrome'],
     baseURL: process.env.WHEREFORE_TEST_BASE_URL,
     viewport: { width: 1440, height: 900 },
+    actionTimeout: 15_000,
+    navigationTimeout: 30_000,
     locale: 'en-US',
     timezoneId: 'America/New_York',
     // A failure leaves a picture and the page's outline; recording every step of every test would double the time on two cores.

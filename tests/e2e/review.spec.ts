@@ -75,7 +75,7 @@ test('a change from the suggestion wants a reason before it is signed', async ({
   const page = await desk.signedIn('radiologist')
   await go(page, `/review?open=${request.reference}`)
   await decision(page).getByRole('radio', { name: /^Without(,|$)/ }).check({ force: true })
-  await expect(decision(page).getByLabel('Agent')).toHaveCount(0)
+  await expect(decision(page).getByLabel('Agent', { exact: true })).toHaveCount(0)
   await decision(page).getByRole('button', { name: /Approve as chosen/ }).click()
   await expect(alerts(decision(page)).filter({ hasText: 'Give a reason for this choice.' })).toBeFocused()
   await expect(page).toHaveTitle(/^Error: /)

@@ -38,9 +38,9 @@ export async function chooseQuestion(page: Page, words: string, question: string
   await expect(page.getByLabel('Clinical question')).toHaveValue(question)
 }
 
-/** One answer of a group that is asked by its legend. */
+/** One answer of a group that is asked by its legend; a hint may follow the answer's own words. */
 export async function answer(page: Page, legend: string | RegExp, choice: string): Promise<void> {
-  await page.getByRole('group', { name: legend }).getByLabel(choice, { exact: true }).check()
+  await page.getByRole('group', { name: legend }).getByRole('radio', { name: new RegExp(`^${choice}(?!\\w)`) }).check()
 }
 
 export async function writeHistory(page: Page, text: string): Promise<void> {
