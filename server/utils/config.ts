@@ -30,11 +30,33 @@ export type ServerConfig = z.output<typeof configSchema>
  *
  * @throws Error with the list of settings.
  */
-export function readConfig(raw: unknown): ServerConfig {
-  const parsed = configSchema.safeParse(raw)
+export function readConfig(raw: unknown, env: NodeJS.ProcessEnv = process.env): ServerConfig {
+  const parsed = configSchema.safeParse(asWritten(raw, env))
   if (parsed.success) return parsed.data
   const names = parsed.error.issues.map(issue => `${settingName(issue.path)}: ${issue.code === 'custom' ? issue.message : issue.code.replaceAll('_', ' ')}`)
   throw new Error(`Wherefore cannot start. Settings to put right: ${names.join('; ')}`)
+}
+
+/** Settings that are text, whatever they look like. */
+const texts = [['databaseUrl'], ['ownerDatabaseUrl'], ['workerDatabaseUrl'], ['migrationsDir'], ['authSecret'], ['smtp', 'host'], ['smtp', 'user'], ['smtp', 'password'], ['smtp', 'from']] as const
+
+/**
+ * The framework reads the environment as JSON where it can: a password of digits would become a number, and `1e5` another password.
+ * So texts are taken from the environment as they were written there.
+ */
+function asWritten(raw: unknown, env: NodeJS.ProcessEnv): unknown {
+  if (!isRecord(raw)) return raw
+  const whole: Record<string, unknown> = { ...raw, ...(isRecord(raw.smtp) ? { smtp: { ...raw.smtp } } : {}) }
+  for (const path of texts) {
+    const written = env[settingName(path)]
+    const [group, name] = path.length === 2 ? [whole[path[0]], path[1]] : [whole, path[0]]
+    if (written !== undefined && isRecord(group)) group[name] = written
+  }
+  return whole
+}
+
+function isRecord(value: unknown): value is Record<string, unknown> {
+  return typeof value === 'object' && value !== null
 }
 
 /** `ehr.baseUrl` is set by `NUXT_EHR_BASE_URL`. */
