@@ -31,6 +31,17 @@ export interface SignInThrottle {
  * who guesses cannot keep a colleague out.
  */
 export function createSignInThrottle(pool: Pool): SignInThrottle {
+  const made = throttles.get(pool)
+  if (made) return made
+  const throttle = makeThrottle(pool)
+  throttles.set(pool, throttle)
+  return throttle
+}
+
+/** One for each pool: a limiter clears its old counters by a timer that never ends. */
+const throttles = new WeakMap<Pool, SignInThrottle>()
+
+function makeThrottle(pool: Pool): SignInThrottle {
   const pair = createLimiter(pool, 'sign-in-pair', { points: pairTries, seconds: hour })
   const address = createLimiter(pool, 'sign-in-address', { points: addressTries, seconds: hour })
   const account = createLimiter(pool, 'sign-in-account', { points: accountTries, seconds: 30 * day })
