@@ -19,8 +19,14 @@ export function registerPool(db: Database, pool: pg.Pool): void {
  * finished answer is given back instead, and the key is stored with the work: both commit or neither.
  *
  * The result must be plain JSON, since it may be answered again from the table.
+ *
+ * @param again runs before an earlier answer is given back, to ask whether this person may still have it.
  */
-export async function inTransaction<T>(ctx: ServiceContext, work: (tx: Database) => Promise<T>): Promise<T> {
+export async function inTransaction<T>(
+  ctx: ServiceContext,
+  work: (tx: Database) => Promise<T>,
+  again: (tx: Database) => Promise<void> = () => Promise.resolve(),
+): Promise<T> {
   const pool = pools.get(ctx.db)
   if (!pool) return await work(ctx.db)
   const client = await pool.connect()
@@ -33,6 +39,7 @@ export async function inTransaction<T>(ctx: ServiceContext, work: (tx: Database)
       await tx.execute(sql`select pg_advisory_xact_lock(hashtextextended(${`${token.userId} ${token.route} ${token.key}`}, 0))`)
       const earlier = await findAnswer<T>(tx, token)
       if (earlier) {
+        await again(tx)
         await client.query('commit')
         return earlier.response
       }

@@ -3,7 +3,7 @@ import type { WriteResult } from '#shared/types/views'
 import { letters } from '#server/database/schema/requests'
 import type { ServiceContext } from '../context'
 import { StateConflict } from '../errors'
-import { changeRequest } from '../request/change'
+import { changeRequest, permitRepeat } from '../request/change'
 import { inTransaction } from '../transaction'
 import { closeAfterLetter } from './close-after-letter'
 
@@ -34,5 +34,5 @@ export async function handOverLetter({ ctx, input }: { ctx: ServiceContext, inpu
       },
     })
     return closing.letterId === null ? noted : await closeAfterLetter(tx, ctx, { requestId: noted.id, letterId: closing.letterId })
-  })
+  }, tx => permitRepeat(tx, ctx, { id: input.id, action: 'letter.manage' }))
 }

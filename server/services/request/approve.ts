@@ -10,7 +10,7 @@ import type { WriteResult } from '#shared/types/views'
 import type { Database } from '#server/database/client'
 import { decisions } from '#server/database/schema/requests'
 import { enqueue } from '#server/jobs/queue'
-import { userOf } from '../context'
+import { permitRequest, userOf } from '../context'
 import { addedNeedEvents } from '#server/database/append'
 import type { ServiceContext } from '../context'
 import { Invalid, Stale } from '../errors'
@@ -24,8 +24,9 @@ import { gatherInputs, runAssessment, storeAssessment } from './assess-request'
 import type { Assessed } from './assess-request'
 import { changeRequest } from './change'
 import type { ChangeOutcome } from './change'
-import { loadRequest } from './load'
+import { loadRequest, scopeOf } from './load'
 import type { LoadedRequest } from './load'
+import { noSlot } from './slot'
 import { currentAssessment } from './stored'
 
 type Approval = z.output<typeof approvalSchema>
@@ -37,10 +38,12 @@ type Approval = z.output<typeof approvalSchema>
  * @throws Stale with the changes in words, Invalid where a reason, a word or a dose is missing.
  */
 export async function approveRequest({ ctx, input }: { ctx: ServiceContext, input: { id: string, version: number } & Approval }): Promise<WriteResult> {
-  const earlier = await earlierAnswer<WriteResult>(ctx)
-  if (earlier) return earlier.response
   const actor = userOf(ctx)
   const before = await loadRequest(ctx.db, input.id)
+  // Asked before the hospital record is, and again below on the row as it then stands.
+  permitRequest(ctx, 'request.approve', scopeOf(before.request))
+  const earlier = await earlierAnswer<WriteResult>(ctx)
+  if (earlier) return earlier.response
   const record = await freshRecord(ctx, before)
   const inForce = await rulesInForce(ctx.db, ctx.now)
 
@@ -107,7 +110,8 @@ async function sign({ ctx, input, actorId, record, inForce }: {
       if (keepsSlot(loaded)) await queueLetter(tx, ctx, { loaded, decision, assessment: { inputs, inForce, result: assessed.result }, letter: { kind: 'changed', change: 'replanned' } })
       await enqueue(tx, 'notify-clinician', { requestId: request.id, event: 'decision' }, { key: `notify-${request.id}-decision`, runAt: new Date(ctx.now.getTime() + 60_000) })
       return {
-        set: { ...stored, record, recordReadAt: record ? new Date(record.readAt) : request.recordReadAt, currentDecisionId: decision.id, decidedAt: ctx.now, replyWaiting: false, awaiting: request.awaiting === 'ordering' ? null : request.awaiting },
+        // A time that has passed is no longer a slot.
+        set: { ...stored, ...(keepsSlot(loaded) ? {} : noSlot), record, recordReadAt: record ? new Date(record.readAt) : request.recordReadAt, currentDecisionId: decision.id, decidedAt: ctx.now, replyWaiting: false, awaiting: request.awaiting === 'ordering' ? null : request.awaiting },
         audit: 'request.approve',
         detail: { contrast: input.contrast, agent: input.agent, suggestion: assessed.result.suggestion, differs: Boolean(input.differsReason), word: input.wordGiven },
       }

@@ -77,7 +77,19 @@ export async function changeRequest(ctx: ServiceContext, change: Change): Promis
     })
     await tx.execute(sql`select pg_notify('wherefore_requests', ${request.id})`)
     return { id: request.id, reference: outcome.set?.reference ?? request.reference, state, version }
-  })
+  }, tx => permitRepeat(tx, ctx, change))
+}
+
+/**
+ * A write sent again is answered as before, to whoever may still read the request. The rule of the write itself need not hold any
+ * more: a discarded draft is no draft.
+ *
+ * @throws NotFound
+ */
+export async function permitRepeat(tx: Database, ctx: ServiceContext, { id, action }: Pick<Change, 'id' | 'action'>): Promise<void> {
+  const { request } = await loadRequest(tx, id)
+  permitRequest(ctx, 'request.read', scopeOf(request))
+  ctx.permitted.add(action)
 }
 
 /** Who changed it last, so that the loser of a race is told. */

@@ -2,6 +2,7 @@ import { eq, sql } from 'drizzle-orm'
 import type { z } from 'zod'
 import { emptyScreening } from '#shared/domain/safety/screening'
 import type { RecordReading } from '#shared/domain/record/types'
+import { mayBeCopied } from '#shared/domain/request/lifecycle'
 import type { RequestForm } from '#shared/domain/request/form'
 import type { createRequestSchema } from '#shared/schemas/requests'
 import type { WriteResult } from '#shared/types/views'
@@ -13,6 +14,7 @@ import type { ServiceContext } from '../context'
 import { Forbidden, Invalid, StateConflict, Unavailable } from '../errors'
 import { readPatientRecord } from '../record/read-patient-record'
 import { earlierAnswer, inTransaction } from '../transaction'
+import { conflictError } from './change'
 import { loadRequest, scopeOf } from './load'
 
 const emptyForm: RequestForm = {
@@ -44,7 +46,7 @@ export async function createDraft({ ctx, input }: { ctx: ServiceContext, input: 
   if (!actor.practiceIds.includes(input.practiceId)) throw new Invalid([{ path: 'practiceId', message: 'Choose one of your own practices.' }])
   const earlier = await earlierAnswer<WriteResult>(ctx)
   if (earlier) return earlier.response
-  const copied = input.copyOf ? await copiedForm(ctx, input.copyOf, input.ehrPatientId) : null
+  const copied = input.copyOf ? await copiedForm(ctx, { ...input, id: input.copyOf }) : null
   const reading = await readPatientRecord(ctx, input.ehrPatientId)
   if (reading.patient?.deceased) throw new StateConflict('The hospital record says that this person has died; no exam can be requested.')
   if (reading.patient && !reading.patient.birthDate) throw new StateConflict('The hospital record holds no date of birth for this person. Have it completed there first.')
@@ -76,12 +78,21 @@ export async function createDraft({ ctx, input }: { ctx: ServiceContext, input: 
   })
 }
 
-/** A corrected copy starts from what was sent; safety answers are asked afresh. */
-async function copiedForm(ctx: ServiceContext, id: string, ehrPatientId: string): Promise<{ id: string, form: RequestForm }> {
-  const { request, patient } = await loadRequest(ctx.db, id)
+/**
+ * A corrected copy starts from what was sent. Safety answers are to be confirmed afresh, and the patient's wish on e-mail, which may
+ * have changed since, is not carried over.
+ */
+async function copiedForm(
+  ctx: ServiceContext,
+  { id, ehrPatientId, practiceId }: { id: string, ehrPatientId: string, practiceId: string },
+): Promise<{ id: string, form: RequestForm }> {
+  const loaded = await loadRequest(ctx.db, id)
+  const { request, patient } = loaded
   permitRequest(ctx, 'request.resend', scopeOf(request))
+  if (!mayBeCopied(request.state)) throw conflictError(loaded)
   if (patient.ehrId !== ehrPatientId) throw new Forbidden('A copy stays with the same patient.')
-  return { id, form: { ...request.form, screeningConfirmed: false } }
+  if (request.practiceId !== practiceId) throw new Forbidden('A copy stays with the practice that asked.')
+  return { id, form: { ...request.form, screeningConfirmed: false, detailsByEmail: null, patientEmail: null } }
 }
 
 /** Stores or refreshes the person as the record knows them. What the patient told us about e-mail stays. */

@@ -28,6 +28,7 @@ export async function postMessage({ ctx, input }: { ctx: ServiceContext, input: 
     step: ({ request }) => input.kind === 'answer' && request.state === 'queried' && request.awaiting === side ? 'answer' : null,
     apply: async (tx, loaded) => {
       const { request, patient } = loaded
+      if (request.state === 'draft' || request.state === 'discarded') throw conflictError(loaded)
       const answers = input.kind === 'answer'
       if (answers && request.awaiting !== side) throw conflictError(loaded)
       if (input.kind === 'question' && !['sent', 'approved', 'booked', 'reopened'].includes(request.state)) throw conflictError(loaded)

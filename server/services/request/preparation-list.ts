@@ -19,7 +19,7 @@ import { examMinutes } from '#shared/domain/booking/exam-minutes'
 const openWorkLimit = 2_000
 
 const preparing = sql`${requests.state} in ('approved', 'booked', 'reopened')
-  or (${requests.state} = 'queried' and ${requests.slotStartsAt} is not null)`
+  or (${requests.state} in ('queried', 'sent') and ${requests.slotStartsAt} is not null)`
 const doneLately = sql`${requests.state} = 'done'`
 
 /**
@@ -32,7 +32,8 @@ export async function listPreparation({ ctx, input }: { ctx: ServiceContext, inp
   const inForce = await rulesInForce(ctx.db, ctx.now)
   const { policy } = inForce.rules
   const rows = await selectRows(ctx.db).where(and(...conditions))
-    .orderBy(sql`${requests.slotStartsAt} asc nulls first`, asc(requests.priorityRank), asc(requests.id)).limit(openWorkLimit)
+    // Exams that are over come last, so that they never crowd out those to come.
+    .orderBy(sql`${doneLately}`, sql`${requests.slotStartsAt} asc nulls first`, asc(requests.priorityRank), asc(requests.id)).limit(openWorkLimit)
   const ids = rows.map(row => row.id)
   const [extras, events, written] = ids.length === 0
     ? [[], [], []]
@@ -58,7 +59,7 @@ export async function listPreparation({ ctx, input }: { ctx: ServiceContext, inp
 
 /** Which tabs an exam stands on; an exam may be on several. */
 export function onTab(row: Pick<PreparationRow, 'state' | 'needs' | 'slot'>, tab: PreparationTab): boolean {
-  const held = row.state === 'reopened' || row.state === 'queried'
+  const held = row.state === 'reopened' || row.state === 'queried' || row.state === 'sent'
   if (tab === 'done') return row.state === 'done'
   if (row.state === 'done') return false
   if (tab === 'held') return held

@@ -1,3 +1,4 @@
+import { isDeepStrictEqual } from 'node:util'
 import { desc, eq } from 'drizzle-orm'
 import type { z } from 'zod'
 import { starterAgents } from '#shared/domain/contrast/agents'
@@ -60,17 +61,19 @@ export async function recordGiven({ ctx, input }: { ctx: ServiceContext, input: 
         recordedAt: ctx.now,
         correctsId: earlier?.id ?? null,
       })
-      await queueLetter(tx, ctx, {
+      const toldBefore = earlier && {
+        contrast: earlier.contrast, agentId: earlier.agent, differsCause: earlier.differsCause, reaction: earlier.reaction !== 'none', extravasation: earlier.extravasation,
+      }
+      const told = {
+        contrast: input.contrast, agentId: input.agent, differsCause: differs ? input.differsCause : null,
+        reaction: input.reaction !== 'none', extravasation: input.extravasation,
+      }
+      // A corrected lot or volume is nothing that the letter says: the patient is not written to twice.
+      if (!isDeepStrictEqual(told, toldBefore)) await queueLetter(tx, ctx, {
         loaded,
         decision,
         assessment: { inputs: assessment.row.inputs, inForce: assessment.inForce, result: assessment.row.result },
-        letter: {
-          kind: 'after',
-          given: {
-            contrast: input.contrast, agentId: input.agent, differsCause: differs ? input.differsCause : null,
-            reaction: input.reaction !== 'none', extravasation: input.extravasation,
-          },
-        },
+        letter: { kind: 'after', given: told },
       })
       return {
         set: {},

@@ -23,7 +23,9 @@ export async function refreshAssessment({ ctx, input }: { ctx: ServiceContext, i
   const inForce = await rulesInForce(ctx.db, ctx.now)
   return await inTransaction(ctx, async (tx) => {
     if (usable) {
-      if (reading.patient) await keepPatient(tx, ctx, reading)
+      // Another date of birth than the one confirmed is for a person to look at, not to be taken over unseen.
+      const samePerson = Boolean(reading.patient?.birthDate) && reading.warnings.every(warning => warning.id !== 'birth-date-differs')
+      if (samePerson) await keepPatient(tx, ctx, reading)
       await tx.update(requests).set({ record: reading, recordReadAt: new Date(reading.readAt) }).where(eq(requests.id, request.id))
     }
     await recordAudit(tx, ctx, {

@@ -1,4 +1,4 @@
-import { eq, sql } from 'drizzle-orm'
+import { and, eq, isNull, lte, or, sql } from 'drizzle-orm'
 import type { RecordReading } from '#shared/domain/record/types'
 import { missingForSending } from '#shared/domain/request/complete'
 import { priorityRank } from '#shared/domain/request/priority'
@@ -6,15 +6,17 @@ import { decisionDueAt } from '#shared/domain/request/promise'
 import type { WriteResult } from '#shared/types/views'
 import type { Database } from '#server/database/client'
 import { patients } from '#server/database/schema/requests'
-import { userOf } from '../context'
+import { permitRequest, userOf } from '../context'
 import type { ServiceContext } from '../context'
+import { recordAudit } from '../audit/record'
 import { Invalid } from '../errors'
 import { freshRecord } from '../record/fresh-record'
 import { rulesInForce } from '../rules/in-force'
 import { earlierAnswer } from '../transaction'
 import { gatherInputs, runAssessment, storeAssessment } from './assess-request'
 import { changeRequest } from './change'
-import { loadRequest } from './load'
+import { loadRequest, scopeOf } from './load'
+import type { RequestRecord } from './load'
 
 /**
  * Signs and sends a draft: the server assesses the saved answers against the freshest record it could read, freezes the result
@@ -23,10 +25,12 @@ import { loadRequest } from './load'
  * @throws Invalid with a path for everything still missing.
  */
 export async function sendRequest({ ctx, input }: { ctx: ServiceContext, input: { id: string, version: number } }): Promise<WriteResult> {
-  const earlier = await earlierAnswer<WriteResult>(ctx)
-  if (earlier) return earlier.response
   const actor = userOf(ctx)
   const before = await loadRequest(ctx.db, input.id)
+  // Asked before the hospital record is, and again below on the row as it then stands.
+  permitRequest(ctx, 'request.send', scopeOf(before.request))
+  const earlier = await earlierAnswer<WriteResult>(ctx)
+  if (earlier) return earlier.response
   const record = await freshRecord(ctx, before)
   const inForce = await rulesInForce(ctx.db, ctx.now)
   return await changeRequest(ctx, {
@@ -41,7 +45,7 @@ export async function sendRequest({ ctx, input }: { ctx: ServiceContext, input: 
       const question = inForce.rules.guidance.questions.find(candidate => candidate.id === form.questionId) ?? null
       const missing = missingForSending(form, { question, assessment: assessed.result, inputs, policy: inForce.rules.policy })
       if (missing.length > 0 || !question) throw new Invalid(missing, 'Some answers are still missing.')
-      if (form.detailsByEmail !== null || form.patientEmail) await keepConsent(tx, ctx, patient.id, form)
+      if (form.detailsByEmail !== null || form.patientEmail) await keepConsent(tx, ctx, request)
       const stored = await storeAssessment(tx, ctx, { ...assessed, requestId: request.id, cause: 'send', inForce })
       return {
         set: {
@@ -68,12 +72,15 @@ function recordColumns(record: RecordReading | null, readAt: Date | null) {
   return { record, recordReadAt: record && record.state !== 'unreachable' ? new Date(record.readAt) : readAt }
 }
 
-async function keepConsent(tx: Database, ctx: ServiceContext, patientId: string, form: { detailsByEmail: boolean | null, patientEmail: string | null }): Promise<void> {
+/** What the form says on e-mail becomes the patient's wish, unless somebody asked again after the form was last saved. */
+async function keepConsent(tx: Database, ctx: ServiceContext, { form, patientId, practiceId, id, updatedAt }: RequestRecord): Promise<void> {
   const actor = userOf(ctx)
-  await tx.update(patients).set({
+  const kept = await tx.update(patients).set({
     ...(form.patientEmail ? { email: form.patientEmail } : {}),
     ...(form.detailsByEmail === null ? {} : { detailsByEmail: form.detailsByEmail, consentAskedById: actor.userId, consentAskedAt: ctx.now }),
-  }).where(eq(patients.id, patientId))
+  }).where(and(eq(patients.id, patientId), or(isNull(patients.consentAskedAt), lte(patients.consentAskedAt, updatedAt)))).returning({ id: patients.id })
+  if (kept.length === 0) return
+  await recordAudit(tx, ctx, { action: 'patient.consent', objectType: 'request', objectId: id, patientId, practiceId, detail: { detailsByEmail: form.detailsByEmail, address: form.patientEmail !== null } })
 }
 
 /** WF-26-004318: the year in the department's zone, then a number never used twice. */

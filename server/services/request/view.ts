@@ -6,8 +6,8 @@ import { mayOnRequest, requestPermissions } from '#shared/domain/access/permissi
 import type { RequestAction } from '#shared/domain/access/permissions'
 import { starterAgents } from '#shared/domain/contrast/agents'
 import type { AgentId } from '#shared/domain/contrast/types'
-import { isTransition, transition, undoSeconds } from '#shared/domain/request/lifecycle'
-import type { TransitionName } from '#shared/domain/request/lifecycle'
+import { isTransition, mayBeCopied, transition, undoSeconds } from '#shared/domain/request/lifecycle'
+import type { Side, TransitionName } from '#shared/domain/request/lifecycle'
 import { roleSide } from '#shared/domain/request/messages'
 import { ageWords } from '#shared/domain/record/age-words'
 import type { AdministrationView, DecisionView, LetterView, MessageView, PatientView, RequestView, TimelineEntry } from '#shared/types/views'
@@ -33,6 +33,7 @@ export async function viewRequest({ ctx, input }: { ctx: ServiceContext, input: 
   const loaded = await loadRequest(ctx.db, input.id)
   const { request, patient, practice } = loaded
   permitRequest(ctx, 'request.read', scopeOf(request))
+  const side = roleSide(actor.role)
   const [current, decision, thread, events, given, sent, timeline, ledger, asker, inForce] = await Promise.all([
     currentAssessment(ctx.db, request),
     loadDecision(ctx.db, request),
@@ -40,7 +41,7 @@ export async function viewRequest({ ctx, input }: { ctx: ServiceContext, input: 
     loadNeedEvents(ctx.db, request.id),
     loadAdministration(ctx.db, request.id),
     loadLetters(ctx.db, request.id),
-    loadTimeline(ctx.db, request.id),
+    loadTimeline(ctx.db, request.id, side),
     exposureLedger(ctx.db, patient.id),
     patient.consentAskedById ? ctx.db.select({ name: users.name }).from(users).where(eq(users.id, patient.consentAskedById)) : [],
     rulesInForce(ctx.db, ctx.now),
@@ -49,7 +50,6 @@ export async function viewRequest({ ctx, input }: { ctx: ServiceContext, input: 
   await recordAudit(ctx.db, ctx, {
     action: 'request.read', objectType: 'request', objectId: request.id, reference: request.reference, patientId: patient.id, practiceId: request.practiceId,
   })
-  const side = roleSide(actor.role)
   return {
     id: request.id,
     reference: request.reference,
@@ -134,7 +134,7 @@ function actionsNow(ctx: ServiceContext, request: RequestRecord, decision: Decis
     switch (action) {
       case 'request.undo': return decision?.signedById === actor.userId && undoUntil(decision) > ctx.now
       case 'request.record-given': return request.state === 'booked' ? true : request.state === 'done' || request.state === 'closed'
-      case 'request.resend': return request.state === 'declined' || request.state === 'withdrawn'
+      case 'request.resend': return mayBeCopied(request.state)
       case 'need.mark': return ['sent', 'queried', 'reopened', 'approved', 'booked'].includes(request.state)
       case 'message.post': return request.state !== 'draft' && request.state !== 'discarded'
       case 'letter.manage': return isTransition(request.state, 'complete') || request.state === 'done'
@@ -234,9 +234,11 @@ export async function loadLetters(db: Database, requestId: string): Promise<Lett
 
 const quiet: AuditAction[] = ['request.read', 'request.edit', 'request.record', 'letter.read']
 
-async function loadTimeline(db: Database, requestId: string): Promise<TimelineEntry[]> {
+/** That imaging wrote an internal note is itself internal. */
+async function loadTimeline(db: Database, requestId: string, side: Side): Promise<TimelineEntry[]> {
+  const shown = side === 'imaging' ? undefined : sql`coalesce(${auditEvents.detail} ->> 'internal', 'false') <> 'true'`
   const rows = await db.select({ at: auditEvents.at, who: auditEvents.actorName, action: auditEvents.action }).from(auditEvents)
-    .where(and(eq(auditEvents.objectType, 'request'), eq(auditEvents.objectId, requestId), notInArray(auditEvents.action, quiet)))
+    .where(and(eq(auditEvents.objectType, 'request'), eq(auditEvents.objectId, requestId), notInArray(auditEvents.action, quiet), shown))
     .orderBy(asc(auditEvents.id)).limit(200)
   return rows.flatMap(({ at, who, action }) => isAuditAction(action) ? [{ at: at.toISOString(), who, action, sentence: auditSentences[action] }] : [])
 }

@@ -77,6 +77,11 @@ export function transition(
 /** Seconds in which the same radiologist may take a decision back; later only by reopening. */
 export const undoSeconds = 60
 
+/** Whether a corrected copy may start from a request in this state: one that came to nothing, for a reason that can be put right. */
+export function mayBeCopied(state: RequestState): boolean {
+  return state === 'declined' || state === 'withdrawn'
+}
+
 /** Whether the state allows the transition at all, whoever asks. */
 export function isTransition(from: RequestState, name: TransitionName): boolean {
   return transitions.some(row => row.name === name && (row.from as readonly RequestState[]).includes(from))
