@@ -17,8 +17,8 @@ export interface RankInput {
 /** In a liver exam the agent with the stronger uptake comes first. */
 const liverOrder: readonly AgentId[] = ['gadoxetate', 'gadobenate']
 
-/** Why an agent does not suit this exam; the other reasons stand beside it. */
-function unsuited(agent: Agent, outcome: ContrastOutcome): string | null {
+/** Why an agent does not suit this exam, or null where it does; a patient's own reasons stand beside it. */
+export function unsuited(agent: Agent, outcome: ContrastOutcome): string | null {
   if (outcome === 'iv-hepatobiliary') return agent.liverUptake ? null : 'Not taken up by the liver'
   if (outcome === 'intra-articular') return agent.intraArticularCommon ? null : 'Not in common use in joints'
   return agent.id === 'gadoxetate' ? 'Kept for liver exams' : null

@@ -1,5 +1,6 @@
 import type { SafetyContext } from './context'
 import type { SafetyFinding } from './types'
+import { unsuited } from '../contrast/rank'
 import { mayBeIntravenous } from './context'
 import { finding } from './finding'
 import { safetySources } from './sources'
@@ -7,12 +8,13 @@ import { safetySources } from './sources'
 /** Infants under one, and children below the age on an agent's label. */
 export function findChild(context: SafetyContext): SafetyFinding[] {
   const age = context.age
-  if (!mayBeIntravenous(context) || age === null || age.youngest >= 18) return []
+  const { outcome } = context
+  if (outcome === null || !mayBeIntravenous(context) || age === null || age.youngest >= 18) return []
   if (age.youngest < 1) {
     return [finding({
       id: 'child-under-one', topic: 'child', severity: 'hold',
       text: 'Under one year: no equation estimates GFR. A radiologist decides with the pediatric team; a macrocyclic agent labeled from birth, '
-        + 'one lowest dose, by hand.',
+        + 'in the lowest dose, once and by hand.',
       plain: 'Your baby is very young. A children\'s doctor and a scan doctor decide about contrast.',
       addsNeeds: ['radiologist-word'], asksRadiologist: true,
       barsAgents: context.agents
@@ -22,7 +24,7 @@ export function findChild(context: SafetyContext): SafetyFinding[] {
     })]
   }
   const stocked = new Set(context.policy.stockedAgents.value)
-  const older = context.agents.filter(agent => stocked.has(agent.id)
+  const older = context.agents.filter(agent => stocked.has(agent.id) && unsuited(agent, outcome) === null
     && (agent.youngestLabelledAgeYears === null || agent.youngestLabelledAgeYears > age.youngest))
   if (older.length === 0) return []
   return [finding({

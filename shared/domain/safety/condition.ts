@@ -45,7 +45,7 @@ function findLiver(context: SafetyContext): SafetyFinding[] {
     text: acute
       ? `${stated} in an acute setting: around a transplant or with hepatorenal syndrome, treated like acute kidney injury. A radiologist decides.`
       : `${stated}: with hepatorenal syndrome or around a transplant it counts like acute kidney injury. Group I agents are barred.`,
-    plain: acute ? 'Your liver is ill. A doctor decides about contrast first.' : 'Your liver can affect your kidneys. We check this first.',
+    plain: answer === 'unknown' ? 'We need to know if your liver is ill.' : acute ? 'Your liver is ill. A doctor decides about contrast first.' : 'Your liver can affect your kidneys. We check this first.',
     barsAgents: groupOneAgents(context),
     ...(acute ? { addsNeeds: ['radiologist-word' as const], asksRadiologist: true } : {}),
     source: safetySources.usLabels,

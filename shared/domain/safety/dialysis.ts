@@ -1,7 +1,7 @@
 import { DateTime } from 'luxon'
 import type { SafetyContext } from './context'
 import type { SafetyFinding } from './types'
-import { acrGroupOf, groupOneAgents, mayBeIntravenous } from './context'
+import { acrGroupOf, cannotWait, groupOneAgents, mayBeIntravenous } from './context'
 import { finding } from './finding'
 import { safetySources } from './sources'
 
@@ -50,8 +50,8 @@ function timing(context: SafetyContext): SafetyFinding[] {
     id: 'dialysis-timing', topic: 'dialysis', severity: 'caution',
     text: hours < 0
       ? 'The dialysis session named comes before the planned exam: book the exam before a session, or name the one after it.'
-      : `The next dialysis session is ${Math.round(hours)} hours after the planned exam; policy asks for it within ${limit} hours.`,
-    plain: 'The scan should come shortly before your dialysis. We may move the time.',
+      : `The next dialysis session is ${Math.round(hours)} hours after the planned exam; policy asks for it within ${limit} hours.${cannotWait(context) ? ' The exam need not wait for it: let the nephrologist know.' : ''}`,
+    plain: cannotWait(context) ? 'Your scan is urgent. We tell your dialysis team about it.' : 'The scan should come shortly before your dialysis. We may move the time.',
     addsNeeds: ['dialysis-after'],
     source: context.policy.dialysisWithinHours.source,
   })]

@@ -1,6 +1,8 @@
 import { DateTime } from 'luxon'
 import type { SafetyContext } from './context'
 import type { GadoliniumExposure, SafetyFinding } from './types'
+import { countsAsBelow } from '../kidney/evaluate'
+import { isAcute } from '../kidney/injury'
 import { mayBeIntravenous, mayUseContrast } from './context'
 import { finding } from './finding'
 import { safetySources } from './sources'
@@ -47,32 +49,50 @@ function findInterval(context: SafetyContext): SafetyFinding[] {
   const last = context.exposures
     // A month or year alone says nothing about hours.
     .filter(exposure => /^\d{4}-\d{2}-\d{2}/.test(exposure.givenAt))
-    .map(exposure => latestInstant(exposure, zone))
-    .filter(instant => instant !== null && instant.startOf('day') <= at)
-    .reduce<DateTime | null>((newest, instant) => newest === null || (instant !== null && instant > newest) ? instant : newest, null)
+    .flatMap((exposure) => {
+      const instant = latestInstant(exposure, zone)
+      return instant !== null && instant.startOf('day') <= at ? [{ exposure, instant }] : []
+    })
+    .reduce<{ exposure: GadoliniumExposure, instant: DateTime } | null>((newest, one) => newest === null || one.instant > newest.instant ? one : newest, null)
   if (last === null) return []
-  const hours = Math.max(0, at.diff(last, 'hours').hours)
-  const low = kidney.status === 'dialysis' || (kidney.gateEgfr !== null && kidney.gateEgfr < 30)
+  const hours = Math.max(0, at.diff(last.instant, 'hours').hours)
+  // An unsteady creatinine counts as an eGFR below 30, and dialysis that is not ruled out counts as dialysis.
+  const low = countsAsBelow(kidney, 30) || context.screening.dialysis === 'unknown'
   const middle = kidney.gateEgfr === null || kidney.gateEgfr <= 60
   const rule = low ? policy.repeatIntervalHours.value.below30 : middle ? policy.repeatIntervalHours.value.from30To60 : policy.repeatIntervalHours.value.above60
   if (hours >= rule.optimal) return []
-  const band = low ? 'an eGFR below 30 or dialysis' : middle ? (kidney.gateEgfr === null ? 'an eGFR that is not known' : 'an eGFR of 30 to 60') : 'an eGFR above 60'
-  const ago = `The last gadolinium dose lies ${Math.floor(hours)} hours before ${context.planned ? 'the planned exam' : 'now'}`
+  const band = low ? lowBand(context) : middle ? (kidney.gateEgfr === null ? 'an eGFR that is not known' : 'an eGFR of 30 to 60') : 'an eGFR above 60'
+  const ago = `The last gadolinium dose was given ${agoWords(last.exposure, Math.floor(hours), context)}`
   const source = policy.repeatIntervalHours.source
   if (hours < rule.least) {
     return [finding({
       id: 'exposure-interval-under-least', topic: 'exposure', severity: 'hold',
       text: `${ago}. With ${band}, ${rule.optimal} hours are advised and ${rule.least} the least when urgent: a radiologist's word and a reason are needed.`,
-      plain: 'You had contrast very lately. A doctor decides if more can be given now.',
+      plain: 'You had contrast very recently. A doctor decides if more can be given now.',
       addsNeeds: ['radiologist-word'], asksRadiologist: true, source,
     })]
   }
   return [finding({
     id: 'exposure-interval-under-optimal', topic: 'exposure', severity: 'caution',
     text: `${ago}. With ${band}, ${rule.optimal} hours are advised, ${rule.least} the least when urgent.`,
-    plain: 'You had contrast lately. We may wait a little before we give more.',
+    plain: 'You had contrast recently. We may wait a little before we give more.',
     source,
   })]
+}
+
+/** Why the longest interval applies, after "With". */
+function lowBand({ kidney, screening }: SafetyContext): string {
+  if (kidney.status === 'dialysis') return 'dialysis'
+  if (screening.dialysis === 'unknown') return 'dialysis not ruled out'
+  return isAcute(kidney.injury) ? 'an unsteady creatinine, which counts as an eGFR below 30' : 'an eGFR below 30'
+}
+
+/** "10 hours ago", "11 hours before the planned exam"; of a dose known by its day only no more hours are claimed than are sure. */
+function agoWords({ givenAt }: GadoliniumExposure, hours: number, { planned }: SafetyContext): string {
+  const count = hours === 1 ? '1 hour' : `${hours} hours`
+  const until = planned ? `${count} before the planned exam` : `${count} ago`
+  if (givenAt.includes('T')) return until
+  return hours === 0 ? `on ${givenAt}, the hour not known` : `on ${givenAt}, at least ${until}`
 }
 
 function findEarlierDoses(context: SafetyContext): SafetyFinding[] {
@@ -84,8 +104,8 @@ function findEarlierDoses(context: SafetyContext): SafetyFinding[] {
   const total = known.reduce((sum, exposure) => sum + (exposure.amountMmol ?? 0), 0)
   const dates = exposures.map(exposure => dayOf(exposure, zone)).sort()
   const doses = exposures.length === 1 ? '1 earlier gadolinium dose' : `${exposures.length} earlier gadolinium doses`
-  const amount = known.length === 0 ? 'amounts not recorded' : known.length === exposures.length
-    ? `${total.toFixed(1)} mmol in all`
+  const amount = known.length === 0 ? (exposures.length === 1 ? 'amount not recorded' : 'amounts not recorded') : known.length === exposures.length
+    ? `${total.toFixed(1)} mmol${exposures.length === 1 ? '' : ' in all'}`
     : `${total.toFixed(1)} mmol in the ${known.length} with an amount`
   const span = dates[0] === dates.at(-1) ? `on ${dates[0]}` : `from ${dates[0]} to ${dates.at(-1)}`
   const linear = exposures.filter(exposure => agents.find(agent => agent.id === exposure.agent)?.structure === 'linear')
@@ -98,7 +118,7 @@ function findEarlierDoses(context: SafetyContext): SafetyFinding[] {
   if (linear.length > 0) {
     findings.push(finding({
       id: 'exposure-earlier-linear', topic: 'exposure', severity: 'info',
-      text: `${linear.length === 1 ? 'One of them was' : `${linear.length} of them were`} with a linear agent, which leaves more gadolinium behind: a macrocyclic agent is the better choice.`,
+      text: `${exposures.length === 1 ? 'It was' : linear.length === 1 ? 'One of them was' : `${linear.length} of them were`} with a linear agent, which leaves more gadolinium behind: a macrocyclic agent is the better choice.`,
       plain: 'We choose the type of contrast that leaves the least behind.',
       source: safetySources.fdaRetention,
     }))

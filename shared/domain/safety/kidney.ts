@@ -43,7 +43,7 @@ function findInjury(context: SafetyContext): SafetyFinding[] {
     return [finding({
       id: 'kidney-unsteady', topic: 'kidney', severity: 'hold',
       text: 'Creatinine is not steady or shows acute injury, so eGFR misleads: treated like an eGFR below 30 until a radiologist says otherwise.',
-      plain: 'Your kidney tests have changed lately. A doctor decides about contrast first.',
+      plain: 'Your kidney tests have changed recently. A doctor decides about contrast first.',
       addsNeeds: ['radiologist-word'], barsAgents: groupOneAgents(context), asksRadiologist: true,
       source: safetySources.kdigoInjury,
     })]
@@ -66,12 +66,15 @@ function findLevel(context: SafetyContext): SafetyFinding[] {
   if (gate === null || isAcute(context.kidney.injury)) return []
   const hold = context.policy.holdBelowEgfr.value
   if (gate < hold) {
+    // Of a range, a bound or two estimates the lowest counts; the words must not claim that it is the true one.
+    const open = (context.kidney.egfr?.value ?? context.kidney.range?.high.value ?? gate) >= hold
+    const level = open ? `eGFR may be below ${hold} and counts as such` : context.kidney.currency === 'too-old' ? `The last eGFR was below ${hold}` : `eGFR is below ${hold}`
     return [finding({
       id: 'kidney-below-hold', topic: 'kidney', severity: 'hold',
-      text: `eGFR is below ${hold}: the department, following ${positionWords[context.policy.kidneyPosition.value]}, holds contrast for a radiologist's word. `
+      text: `${level}: the department, following ${positionWords[context.policy.kidneyPosition.value]}, holds contrast for a radiologist's word. `
         + 'Group I agents are barred; one standard dose at most. US labels advise against contrast here unless it is essential; the ACR and the National Kidney Foundation report no NSF in '
         + '4,931 group II doses below 30, and that holding back may harm more.',
-      plain: 'Your kidneys work less well. A doctor decides about contrast first.',
+      plain: `Your kidneys ${open ? 'may work' : 'work'} less well. A doctor decides about contrast first.`,
       addsNeeds: ['radiologist-word'], barsAgents: groupOneAgents(context), asksRadiologist: true,
       source: safetySources.acrNkf,
     })]

@@ -29,9 +29,9 @@ function namedAgent({ screening }: SafetyContext): AgentId[] {
 /** "Earlier reaction to gadobutrol: mild, allergic-like"; what is not known says how it is taken. */
 function described({ screening, agents }: SafetyContext): string {
   const severity = screening.reactionSeverity === null || screening.reactionSeverity === 'unknown'
-    ? 'severity not known, taken as moderate'
+    ? 'severity not known (taken as moderate)'
     : screening.reactionSeverity
-  const kind = screening.reactionKind === null || screening.reactionKind === 'unknown' ? 'kind not known, taken as allergic-like' : screening.reactionKind
+  const kind = screening.reactionKind === null || screening.reactionKind === 'unknown' ? 'kind not known (taken as allergic-like)' : screening.reactionKind
   return `Earlier reaction to ${agentName(screening.reactionAgent, agents)}: ${severity}, ${kind}`
 }
 
@@ -41,7 +41,7 @@ function allergicLike(context: SafetyContext): SafetyFinding {
   const severity = context.screening.reactionSeverity
   const named = namedAgent(context)
   const what = described(context)
-  const change = named.length > 0 ? 'Another agent' : 'Find out which agent it was, so that another can be taken'
+  const change = named.length > 0 ? 'Another agent' : 'Find out which agent it was, so that another can be taken (a reaction to iodinated contrast does not count)'
   const { oral, accelerated } = policy.premedicationLeadHours.value
   const lead = `premedication from ${oral} hours before (${accelerated} on the accelerated schedule)`
   const watch = `${policy.observationMinutes.value} minutes of observation`

@@ -33,7 +33,7 @@ const tables: Record<string, Row[]> = {
     { when: 'the patient is acutely ill and injury cannot be judged', given: { screening: { acuteIllness: 'yes' }, kidney: { injury: unjudged, creatinine: sample } }, ids: ['kidney-injury-not-judged'], asks: true },
     { when: 'the injection goes into a joint and eGFR is 12', given: { outcome: 'intra-articular', kidney: { gateEgfr: 12, injury: unsteady } }, ids: ['kidney-joint-not-needed'], needs: [], asks: false, bars: [] },
     { when: 'no contrast is wanted and eGFR is 12', given: { outcome: 'none', kidney: { gateEgfr: 12 } }, ids: [] },
-    { when: 'a child has no height', given: { patient: { birthDate: '2018-01-01' }, kidney: { status: 'needs-height', gateEgfr: null } }, ids: ['kidney-needs-height', 'kidney-group-one-without-value', 'child-age-below-label'], needs: ['height'] },
+    { when: 'a child has no height', given: { patient: { birthDate: '2018-01-01' }, kidney: { status: 'needs-height', gateEgfr: null } }, ids: ['kidney-needs-height', 'kidney-group-one-without-value'], needs: ['height'] },
   ],
   dialysis: [
     { when: 'on hemodialysis', given: { screening: { dialysis: 'hemodialysis' }, kidney: { status: 'dialysis', gateEgfr: null } }, ids: ['dialysis-hemodialysis'], needs: ['radiologist-word', 'dialysis-after'], asks: true, bars: groupOne },
@@ -72,7 +72,8 @@ const tables: Record<string, Row[]> = {
   ],
   child: [
     { when: 'five months old', given: { patient: { birthDate: '2026-07-01', weightKg: 7 } }, ids: ['child-under-one'], asks: true, bars: ['gadopiclenol', 'gadobenate', 'gadoxetate', ...groupOne] },
-    { when: 'four years old: below the label of gadoxetate alone', given: { patient: { birthDate: '2022-07-01', weightKg: 16 } }, ids: ['child-age-below-label'], asks: false, bars: [] },
+    { when: 'four years old and gadoxetate, kept for liver exams, is labeled for adults only', given: { patient: { birthDate: '2022-07-01', weightKg: 16 } }, ids: [] },
+    { when: 'four years old with a liver exam: below the label of gadoxetate', given: { outcome: 'iv-hepatobiliary', patient: { birthDate: '2022-07-01', weightKg: 16 } }, ids: ['child-age-below-label'], asks: false, bars: [] },
   ],
   exposure: [
     { when: 'a dose 3 hours ago and eGFR above 60', given: { exposures: [dose('2026-12-01T12:00:00Z')] }, ids: ['exposure-interval-under-least', 'exposure-earlier-doses'], asks: true },
@@ -80,6 +81,8 @@ const tables: Record<string, Row[]> = {
     { when: 'a dose 13 hours ago and eGFR above 60', given: { exposures: [dose('2026-12-01T02:00:00Z')] }, ids: ['exposure-earlier-doses'] },
     { when: 'a dose 50 hours ago and eGFR 20', given: { exposures: [dose('2026-11-29T13:00:00Z')], kidney: { gateEgfr: 20 } }, ids: ['kidney-below-hold', 'exposure-interval-under-least', 'exposure-earlier-doses'] },
     { when: 'a dose on a day only known by date, today', given: { exposures: [dose('2026-12-01')] }, ids: ['exposure-interval-under-least', 'exposure-earlier-doses'] },
+    { when: 'a dose 50 hours ago and a creatinine that is not steady', given: { exposures: [dose('2026-11-29T13:00:00Z')], kidney: { gateEgfr: 45, injury: unsteady } }, ids: ['kidney-unsteady', 'exposure-interval-under-least', 'exposure-earlier-doses'] },
+    { when: 'a dose 50 hours ago and dialysis not ruled out', given: { exposures: [dose('2026-11-29T13:00:00Z')], screening: { dialysis: 'unknown' } }, ids: ['dialysis-unknown', 'exposure-interval-under-least', 'exposure-earlier-doses'] },
     { when: 'a dose in a year only', given: { exposures: [dose('2026')] }, ids: ['exposure-earlier-doses'] },
     { when: 'an old linear dose', given: { exposures: [{ ...dose('2014-05-01'), agent: 'gadodiamide' }] }, ids: ['exposure-earlier-doses', 'exposure-earlier-linear'] },
   ],
@@ -156,8 +159,39 @@ describe('safety findings', () => {
   it('count a dose once that both the department and the hospital record hold', () => {
     const twice = [dose('2025-03-04T16:00:00Z'), { ...dose('2025-03-04'), id: 'l1', source: 'ledger' as const }]
     const text = (exposures: typeof twice) => findSafety(situation({ exposures })).find(found => found.id === 'exposure-earlier-doses')?.text
-    expect(text(twice)).toMatch(/^1 earlier gadolinium dose on 2025-03-04, 7\.4 mmol in all/)
+    expect(text(twice)).toMatch(/^1 earlier gadolinium dose on 2025-03-04, 7\.4 mmol\./)
     expect(text([...twice, dose('2025-09-01')])).toMatch(/^2 earlier gadolinium doses from 2025-03-04 to 2025-09-01, 14\.8 mmol/)
+  })
+
+  it('say when the last dose was given, and claim no hour of a dose known by its day', () => {
+    const text = (givenAt: string) => findSafety(situation({ exposures: [dose(givenAt)], kidney: { gateEgfr: 20 } })).find(found => found.id.startsWith('exposure-interval'))?.text
+    expect(text('2026-12-01T05:00:00Z')).toMatch(/^The last gadolinium dose was given 10 hours ago\. With an eGFR below 30, 168 hours/)
+    // The day ended at 06:00 UTC in the department's zone, 33 hours before.
+    expect(text('2026-11-29')).toMatch(/was given on 2026-11-29, at least 33 hours ago\./)
+    expect(text('2026-12-01')).toMatch(/was given on 2026-12-01, the hour not known\./)
+  })
+
+  it('claim no eGFR below the hold where only the lowest of several is', () => {
+    const one = { display: '28', bound: 'exact', equation: 'ckd-epi-2021-cr', equationLabel: 'CKD-EPI 2021', ageYears: 46, stage: 'G4' } as const
+    const range = { low: { ...one, value: 28 }, high: { ...one, value: 37, display: '37', stage: 'G3b' as const } }
+    const hold = (kidney: Situation['kidney']) => findSafety(situation({ kidney })).find(found => found.id === 'kidney-below-hold')
+    expect(hold({ gateEgfr: 28, range, status: 'needs-sex' })).toMatchObject({ text: expect.stringMatching(/^eGFR may be below 30 and counts as such/), plain: expect.stringMatching(/may work less well/) })
+    expect(hold({ gateEgfr: 28, egfr: { ...one, value: 28 } })?.text).toMatch(/^eGFR is below 30/)
+    expect(hold({ gateEgfr: 28, egfr: { ...one, value: 28 }, currency: 'too-old' })?.text).toMatch(/^The last eGFR was below 30/)
+  })
+
+  it('tell no patient of an illness that is only not ruled out', () => {
+    const [liver] = findSafety(situation({ setting: 'inpatient', screening: { liverDisease: 'unknown' } }))
+    expect(liver).toMatchObject({ id: 'condition-liver-acute', plain: 'We need to know if your liver is ill.' })
+  })
+
+  it('let no urgent exam wait for a dialysis session', () => {
+    const timing = (priority: 'routine' | 'stat') => findSafety(situation({
+      planned: true, at: '2026-12-02T08:00:00Z', priority, screening: { dialysis: 'hemodialysis', nextDialysisAt: '2026-12-03T14:00:00Z' }, kidney: { status: 'dialysis', gateEgfr: null },
+    })).find(found => found.id === 'dialysis-timing')
+    expect(timing('stat')?.text).toMatch(/need not wait for it/)
+    expect(timing('stat')?.plain).not.toMatch(/move the time/)
+    expect(timing('routine')?.text).not.toMatch(/need not wait/)
   })
 
   it('follow the department\'s own hold', () => {
