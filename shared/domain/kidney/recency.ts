@@ -36,8 +36,9 @@ function riskReason({ screening, policy, ageYears }: WindowInput): string | null
   if (screening.kidneyDisease === 'yes') return 'Kidney disease'
   if (screening.kidneyRiskFactor === 'yes') return 'A kidney risk factor'
   if (screening.liverDisease === 'yes') return 'Liver disease'
-  if (ageYears !== null && ageYears > policy.ageRiskAboveYears.value) return `Age over ${policy.ageRiskAboveYears.value}`
-  if (ageYears !== null && ageYears < 1) return 'Under 1 year of age'
+  if (ageYears === null) return 'Age not known'
+  if (ageYears > policy.ageRiskAboveYears.value) return `Age over ${policy.ageRiskAboveYears.value}`
+  if (ageYears < 1) return 'Under 1 year of age'
   const answers = [screening.kidneyDisease, screening.kidneyRiskFactor, screening.liverDisease, screening.dialysis, screening.acuteIllness]
   if (answers.includes('unknown')) return 'A kidney risk not ruled out'
   return answers.includes(null) ? 'Kidney questions not all answered' : null

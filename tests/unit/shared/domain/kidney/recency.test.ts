@@ -37,6 +37,7 @@ describe('the longest accepted age of a creatinine', () => {
     ['just at that age', null, { ageYears: 60 }],
     ['an infant', 42, { ageYears: 0, gateEgfr: null }],
     ['a child of one year', null, { ageYears: 1 }],
+    ['an age that cannot be read', 42, { ageYears: null }],
     ['eGFR 59.9', 14, { gateEgfr: 59.9 }],
     ['eGFR 30', 14, { gateEgfr: 30 }],
     ['eGFR 29.9', 7, { gateEgfr: 29.9, screening: { kidneyDisease: 'yes' } }],
