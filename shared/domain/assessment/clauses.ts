@@ -61,11 +61,8 @@ function kidneyClauses({ findings, kidney, wanted }: Judgement): Clause[] {
   if (kidney.gateEgfr !== null) {
     return [{ text: 'Kidney function: no reason found in the data available to hold back a group II agent.', source: safetySources.acrNkf }]
   }
-  return [{ text: `Kidney function is not known and not required here: ${lowerFirst(kidney.windowReason)}`, source: safetySources.acrManual }]
-}
-
-function lowerFirst(text: string): string {
-  return /^[A-Z][a-z]/.test(text) ? text.charAt(0).toLowerCase() + text.slice(1) : text
+  const asked = kidney.currency === 'not-needed' ? ' Policy asks for no creatinine without a kidney risk factor.' : ''
+  return [{ text: `${kidney.headline}.${asked}`, source: safetySources.acrManual }]
 }
 
 /** What must be in place, with its owner; then what is not needed, so that nobody orders it. */
@@ -74,13 +71,13 @@ export function providedClauses(judged: Judgement): Clause[] {
   return [...needed, ...notNeeded(judged)]
 }
 
-function notNeeded({ suggestion, kidney, needs }: Judgement): Clause[] {
+function notNeeded({ suggestion, kidney, needs, findings }: Judgement): Clause[] {
   if (suggestion === 'none') return [{ text: 'No IV start and no lab work: nothing is injected', source: null }]
   if (suggestion === 'intra-articular') return [{ text: 'No lab work: kidney function does not decide an injection into a joint', source: safetySources.joints }]
   if (suggestion === null || !isIntravenous(suggestion) || needs.some(need => need.kind === 'creatinine')) return []
   if (kidney.status === 'dialysis') return [{ text: 'No new lab work: on dialysis the creatinine decides nothing', source: safetySources.acrNkf }]
-  // An unsteady creatinine may well be repeated: nobody is told that no lab is needed.
-  if (isAcute(kidney.injury)) return []
+  // An unsteady creatinine, or a single one in acute illness, may well be repeated: nobody is told that no lab is needed.
+  if (isAcute(kidney.injury) || findings.some(found => found.id === 'kidney-injury-not-judged')) return []
   if (kidney.currency === 'current' && kidney.windowDays !== null) {
     return [{ text: `No new lab work: the creatinine is inside the ${windowAdjective(kidney.windowDays)} window`, source: null }]
   }
@@ -92,5 +89,5 @@ function notNeeded({ suggestion, kidney, needs }: Judgement): Clause[] {
 export function plainVersion({ guidance, turnedBy, needs, findings, suggestion }: Judgement): Assessment['plain'] {
   const why = turnedBy !== null ? turnedBy.plain : guidance?.status === 'answered' ? guidance.plain : ''
   const before = needs.flatMap(need => plainNeed(need.kind, { findings, suggestion }) ?? [])
-  return { why, before: [...new Set(before)] }
+  return { why, before: [...new Set(before)].filter(line => line !== why) }
 }

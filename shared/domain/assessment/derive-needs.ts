@@ -27,6 +27,11 @@ export interface NeedsContext {
 /** Results and answers are wanted this long before the exam, hours: a working day to act on them. Local choice. */
 const leadHours = 24
 
+/** Whether the exam follows so soon that a day's lead would ask for something due before it was asked for. */
+function isSameDay({ priority, setting }: Pick<AssessmentInputs, 'priority' | 'setting'>): boolean {
+  return priority === 'stat' || priority === 'asap' || setting === 'emergency'
+}
+
 /** What still applies while contrast is open: what informs the radiologist, not what prepares the injection. */
 const neededToDiscuss: readonly NeedKind[] = [
   'creatinine', 'pregnancy-answer', 'weight', 'height', 'reaction-history', 'radiologist-word', 'implant-clearance', 'interpreter', 'sedation',
@@ -66,21 +71,23 @@ function needsPowerInjector(examName: string | null): boolean {
 function describe(kind: NeedKind, context: NeedsContext): Need {
   const { inputs, policy } = context
   const before = (hours: number) => shifted(inputs.plannedAt, -hours)
+  const sameDay = isSameDay(inputs)
+  const lead = sameDay ? 0 : leadHours
   const why = context.findings.find(found => found.addsNeeds.includes(kind))
   const base = { kind, why: why?.text ?? '', source: why?.source ?? safetySources.practice }
   const premedication = policy.premedicationLeadHours.value
   switch (kind) {
-    case 'creatinine': return { ...base, text: creatinineText(context), owner: 'ordering', dueAt: before(leadHours), dueText: 'result in hand the day before the exam' }
+    case 'creatinine': return { ...base, text: creatinineText(context), owner: 'ordering', dueAt: before(lead), dueText: `result in hand ${sameDay ? 'before contrast' : 'the day before the exam'}` }
     case 'iv-start': return {
       ...base, text: ivText(context), why: 'The agent is given by vein.', owner: 'scheduler', dueAt: inputs.plannedAt, dueText: 'on arrival',
       source: policy.cannula.source,
     }
-    case 'pregnancy-answer': return { ...base, text: 'An answer to the pregnancy question', owner: 'ordering', dueAt: before(leadHours), dueText: 'the day before the exam' }
+    case 'pregnancy-answer': return { ...base, text: 'An answer to the pregnancy question', owner: 'ordering', dueAt: before(lead), dueText: sameDay ? 'before contrast' : 'the day before the exam' }
     case 'weight': return {
       ...base, text: inputs.patient.weightKg === null ? 'A weight, in kg' : 'The weight confirmed by a person',
-      owner: 'ordering', dueAt: before(leadHours), dueText: 'before the dose is worked out',
+      owner: 'ordering', dueAt: before(lead), dueText: 'before the dose is worked out',
     }
-    case 'height': return { ...base, text: 'A height, in cm, for the child\'s eGFR', owner: 'ordering', dueAt: before(leadHours), dueText: 'before eGFR is read' }
+    case 'height': return { ...base, text: 'A height, in cm, for the child\'s eGFR', owner: 'ordering', dueAt: before(lead), dueText: 'before eGFR is read' }
     case 'premedication': {
       const accelerated = inputs.setting !== 'outpatient' || inputs.priority === 'stat'
       const hours = accelerated ? premedication.accelerated : premedication.oral
@@ -90,8 +97,11 @@ function describe(kind: NeedKind, context: NeedsContext): Need {
       }
     }
     case 'dialysis-after': return {
-      ...base, text: `Hemodialysis within ${policy.dialysisWithinHours.value} hours after the exam, not before it`, owner: 'scheduler',
+      ...base, owner: 'scheduler',
       dueAt: shifted(inputs.plannedAt, policy.dialysisWithinHours.value), dueText: `within ${policy.dialysisWithinHours.value} hours after the exam`,
+      text: sameDay
+        ? `The next hemodialysis session, best within ${policy.dialysisWithinHours.value} hours after the exam`
+        : `Hemodialysis within ${policy.dialysisWithinHours.value} hours after the exam, not before it`,
       source: policy.dialysisWithinHours.source,
     }
     case 'radiologist-word': return {
@@ -100,18 +110,18 @@ function describe(kind: NeedKind, context: NeedsContext): Need {
     }
     case 'reaction-history': return {
       ...base, text: 'Earlier reactions: which agent, what happened, how severe', owner: 'ordering',
-      dueAt: before(premedication.oral + leadHours), dueText: 'in time for premedication',
+      dueAt: before(sameDay ? 0 : premedication.oral + leadHours), dueText: sameDay ? 'before contrast' : 'in time for premedication',
     }
     case 'medication-guide': return {
       ...base, text: 'Medication Guide given to the patient', why: 'Outpatients get it with the first dose of an agent.',
       owner: 'scan-room', dueAt: inputs.plannedAt, dueText: 'before the injection',
       source: { ...safetySources.fdaRetention, title: 'Medication Guides, 21 CFR 208' },
     }
-    case 'implant-clearance': return { ...base, text: 'MR safety clears the implant or metal', owner: 'scan-room', dueAt: before(leadHours), dueText: 'the day before the exam' }
+    case 'implant-clearance': return { ...base, text: 'MR safety clears the implant or metal', owner: 'scan-room', dueAt: before(lead), dueText: sameDay ? 'before the exam' : 'the day before the exam' }
     case 'interpreter': return { ...base, text: 'An interpreter', why: 'Asked for by the ordering clinician.', owner: 'scheduler', dueAt: inputs.plannedAt, dueText: 'on arrival' }
     case 'sedation': return {
       ...base, text: 'Sedation or anesthesia booked with the exam', why: 'Asked for by the ordering clinician. Fasting and consent belong to anesthesia.',
-      owner: 'scheduler', dueAt: before(leadHours), dueText: 'when the exam is booked',
+      owner: 'scheduler', dueAt: before(lead), dueText: 'when the exam is booked',
     }
     case 'radiologist-present': return {
       ...base,
@@ -136,7 +146,8 @@ function creatinineText({ kidney }: NeedsContext): string {
   return kidney.currency === 'too-old' ? `${fresh}: the newest is ${kidney.ageWords ?? 'too old'}` : fresh
 }
 
-function ivText({ inputs, policy, examName }: NeedsContext): string {
+function ivText({ inputs, policy, examName, findings }: NeedsContext): string {
+  if (findings.some(found => found.id === 'child-under-one')) return 'An IV start on arrival, as large as the veins of an infant allow, for injection by hand'
   const { usualGauge, powerGauge } = policy.cannula.value
   const gauge = needsPowerInjector(examName) ? `An IV start on arrival, ${powerGauge} or larger for the power injector` : `An IV start on arrival, ${usualGauge} or larger`
   const arm = inputs.screening.dialysis === 'hemodialysis' ? '; not in the fistula arm, not through the dialysis catheter' : ''

@@ -15,7 +15,8 @@ export function plainNeed(kind: NeedKind, context: { findings: SafetyFinding[], 
     case 'height': return 'We will ask how tall you are.'
     case 'premedication': return 'Take the medicine your clinic gives you to lower the chance of a reaction. You may need a ride home.'
     case 'dialysis-after': return 'Keep your dialysis plan. We book the scan shortly before a session.'
-    case 'radiologist-word': return context.findings.find(found => found.addsNeeds.includes(kind))?.plain ?? null
+    // An open pregnancy question is put to the patient by its own need.
+    case 'radiologist-word': return context.findings.find(found => found.addsNeeds.includes(kind) && !found.addsNeeds.includes('pregnancy-answer'))?.plain ?? null
     case 'reaction-history': return 'Tell us what happened if you ever had a reaction to contrast, and to which kind.'
     case 'medication-guide': return 'You will get a leaflet about the contrast. Please read it and ask us anything.'
     case 'implant-clearance': return 'Tell us about any implant or metal in your body. Bring the card if you have one.'

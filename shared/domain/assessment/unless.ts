@@ -6,8 +6,9 @@ import type { KidneyFunction } from '../kidney/types'
 import type { ScreeningAnswers } from '../safety/types'
 import { isIntravenous, outcomeWords, usesContrast } from '../contrast/outcome'
 import { answerLabel, decidedValues } from '../guidance/deciders'
+import { kidneyHeld } from '../safety/kidney'
 import { pregnancyAsked } from '../safety/pregnancy'
-import { judge } from './judge'
+import { judge, kidneyOf } from './judge'
 import { listed, needWords, windowWords } from './words'
 
 /** At most this many, the most telling first. */
@@ -30,7 +31,7 @@ export function unlessClauses(inputs: AssessmentInputs, rules: AssessmentRules, 
     ...(base.suggestion === null ? [] : [...screeningChanges(inputs, rules, base), ...thresholdChanges(inputs, rules, base)]),
   ]
   const kept = changes.flatMap((change) => {
-    const effect = effectOf(base, change.result)
+    const effect = effectOf(base, change)
     return effect === null ? [] : [{ ...change, ...effect, rank: change.weight + (effect.leadsTo === null ? 0 : 100) }]
   })
   return merged(kept).sort((a, b) => b.rank - a.rank).slice(0, mostClauses)
@@ -47,7 +48,7 @@ function merged<T extends { fact: string, flips: string, words: string }>(change
   return [...first.values()]
 }
 
-function effectOf(base: Judgement, other: Judgement): { leadsTo: Clause['leadsTo'], words: string } | null {
+function effectOf(base: Judgement, { result: other, flips }: Change): { leadsTo: Clause['leadsTo'], words: string } | null {
   if (other.suggestion !== null && other.suggestion !== base.suggestion) {
     const reason = other.turnedBy === null && other.guidance?.status === 'answered' ? `, because ${other.guidance.inShort}` : ''
     return {
@@ -56,13 +57,14 @@ function effectOf(base: Judgement, other: Judgement): { leadsTo: Clause['leadsTo
     }
   }
   if (base.suggestion === null || other.suggestion === null) return null
-  const words = preparationEffect(base, other)
+  const words = preparationEffect(base, other, flips)
   return words === '' ? null : { leadsTo: null, words: `then ${words}` }
 }
 
 /** What changes around an unchanged outcome, weightiest first. */
-function preparationEffect(base: Judgement, other: Judgement): string {
-  const had = new Set(base.needs.map(need => need.kind))
+function preparationEffect(base: Judgement, other: Judgement, flips: string): string {
+  // "Not on dialysis: then no dialysis" tells nobody anything.
+  const had = new Set(base.needs.map(need => need.kind).filter(kind => flips !== 'dialysis' || kind !== 'dialysis-after'))
   const has = new Set(other.needs.map(need => need.kind))
   // The radiologist's word is said as waiting, not as one more need.
   const added = [...has].filter(kind => !had.has(kind) && kind !== 'radiologist-word').map(kind => needWords[kind])
@@ -106,6 +108,9 @@ function screeningFlips({ screening, patient, now }: AssessmentInputs, { policy 
       ? { field: 'pregnancy', weight: 50, to: { pregnancy: 'no' }, fact: 'The patient is not pregnant after all' }
       : { field: 'pregnancy', weight: 45, to: { pregnancy: 'yes' }, fact: 'The patient is pregnant' })
   }
+  if (pregnancyAsked(patient, policy, now) && screening.pregnancy === 'unknown') {
+    flips.push({ field: 'pregnancy', weight: 50, to: { pregnancy: 'no' }, fact: 'The patient turns out not to be pregnant' })
+  }
   flips.push(screening.earlierReaction === 'yes'
     ? { field: 'earlierReaction', weight: 49, to: { earlierReaction: 'no' }, fact: 'There was no earlier reaction to a gadolinium agent' }
     : {
@@ -113,9 +118,13 @@ function screeningFlips({ screening, patient, now }: AssessmentInputs, { policy 
         to: { earlierReaction: 'yes', reactionAgent: 'unknown', reactionKind: 'unknown', reactionSeverity: 'unknown' },
       })
   if (!vein) return flips
-  flips.push(screening.dialysis === 'hemodialysis' || screening.dialysis === 'peritoneal' || screening.dialysis === 'unknown'
-    ? { field: 'dialysis', weight: 46, to: { dialysis: 'none' }, fact: 'The patient is not on dialysis' }
-    : { field: 'dialysis', weight: 43, to: { dialysis: 'hemodialysis' }, fact: 'The patient is on hemodialysis' })
+  if (screening.dialysis === 'hemodialysis' || screening.dialysis === 'peritoneal' || screening.dialysis === 'unknown') {
+    flips.push({ field: 'dialysis', weight: 46, to: { dialysis: 'none' }, fact: 'The patient is not on dialysis' })
+  }
+  // A patient answered as not on dialysis, with an estimate above the hold, is not on it after all.
+  else if (screening.dialysis === null || base.kidney.gateEgfr === null || kidneyHeld(base.kidney, policy)) {
+    flips.push({ field: 'dialysis', weight: 43, to: { dialysis: 'hemodialysis' }, fact: 'The patient is on hemodialysis' })
+  }
   if (screening.acuteIllness !== 'yes') flips.push({ field: 'acuteIllness', weight: 42, to: { acuteIllness: 'yes' }, fact: 'The patient is acutely ill' })
   if (screening.kidneyRiskFactor !== 'yes') {
     flips.push({ field: 'kidneyRiskFactor', weight: 41, to: { kidneyRiskFactor: 'yes' }, fact: 'A kidney risk factor turns up, such as diabetes or treated high blood pressure' })
@@ -145,6 +154,14 @@ function thresholdChanges(inputs: AssessmentInputs, rules: AssessmentRules, base
       changes.push({
         fact: falls ? `eGFR falls below ${hold}` : `eGFR recovers to ${hold} or more`, flips: 'egfr', weight: 55,
         result: judge(inputs, rules, { kidney: moved }),
+      })
+    }
+  }
+  if (kidney.range !== null) {
+    for (const sex of ['female', 'male'] as const) {
+      changes.push({
+        fact: `The sex for the equation is ${sex}`, flips: 'sex', weight: 56,
+        result: judge(inputs, rules, { kidney: kidneyOf({ ...inputs, patient: { ...inputs.patient, sex } }, rules) }),
       })
     }
   }

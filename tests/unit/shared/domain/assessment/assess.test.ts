@@ -99,7 +99,7 @@ describe('Because', () => {
     const because = texts(assess({ ...marta, patient: { ...marta.patient, weightKg: null }, screening: { ...quietScreening, implants: 'yes', asthma: 'yes' } }, rules).because)
     expect(because).not.toMatch(/weight|implant|asthma/i)
     const reacted = texts(assess({ ...marta, screening: { ...quietScreening, earlierReaction: 'yes' } }, rules).because)
-    expect(reacted).toMatch(/Earlier reaction to an agent that is not known: severity not known, taken as moderate, kind not known, taken as allergic-like/)
+    expect(reacted).toMatch(/Earlier reaction to an agent that is not known: severity not known \(taken as moderate\), kind not known \(taken as allergic-like\)/)
   })
 
   it('says in one line that the kidneys give no reason to hold', () => {
@@ -142,6 +142,13 @@ describe('due times', () => {
     expect(due('iv-start')).toBe('2026-12-03T15:00:00Z')
   })
 
+  it('ask of an exam that follows at once nothing that was due the day before', () => {
+    const now = { ...planned, priority: 'stat' as const, setting: 'emergency' as const, patient: { ...marta.patient, weightKg: null }, screening: { ...quietScreening, earlierReaction: 'unknown' as const, implants: 'unknown' as const } }
+    const early = assess(now, rules).needs.filter(need => need.dueAt !== null && Date.parse(need.dueAt) < Date.parse(planned.plannedAt))
+    expect(early).toEqual([])
+    expect(assess(now, rules).needs.map(need => need.dueText).join()).not.toMatch(/day before/)
+  })
+
   it('are open while no slot is set', () => {
     expect(assess({ ...planned, plannedAt: null }, rules).needs.every(need => need.dueAt === null)).toBe(true)
   })
@@ -151,5 +158,39 @@ describe('due times', () => {
     expect(onDialysis.needs.find(need => need.kind === 'dialysis-after')?.dueAt).toBe('2026-12-04T15:00:00Z')
     expect(onDialysis.needs.find(need => need.kind === 'iv-start')?.text).toMatch(/not in the fistula arm/)
     expect(onDialysis.kidney.egfr).toBeNull()
+  })
+})
+
+describe('the words of one sheet', () => {
+  const infant = { ...marta.patient, birthDate: '2026-08-01', sex: 'male' as const, weightKg: 6.1 }
+  const texts = (inputs: typeof marta) => {
+    const { because, provided } = assess(inputs, rules)
+    return [...because, ...provided].map(clause => clause.text).join('\n')
+  }
+
+  it('say of an infant that there is no eGFR, and ask for a cannula that fits', () => {
+    const sheet = texts({ ...marta, patient: infant, readings: [creatinine(0.25, '2026-11-28T14:00:00Z')] })
+    expect(sheet).toMatch(/No eGFR under 1 year of age; creatinine 0\.25 mg\/dL/)
+    expect(sheet).not.toMatch(/not required|22 G/)
+  })
+
+  it('say what was found where policy asks for no creatinine', () => {
+    const young = { ...marta, patient: { ...marta.patient, birthDate: '1981-01-01', sex: 'male' as const }, readings: [] }
+    expect(texts(young)).toContain('No creatinine found in the record. Policy asks for no creatinine without a kidney risk factor.')
+    expect(texts({ ...young, record: { state: 'unreachable', readAt: null } })).toContain('The record could not be read, so whether there is a creatinine is not known. Policy asks')
+  })
+
+  it('do not spare a lab that a person may want to judge acute injury', () => {
+    const inpatient = texts({ ...marta, setting: 'inpatient', readings: [creatinine(0.94, '2026-12-01T00:00:00Z')] })
+    expect(inpatient).toMatch(/do not suffice to judge acute kidney injury/)
+    expect(inpatient).not.toMatch(/No new lab work/)
+  })
+
+  it('tell the patient each thing once', () => {
+    const woman = { ...marta, patient: { ...marta.patient, birthDate: '1996-05-05' } }
+    const pregnant = assess({ ...woman, screening: { ...quietScreening, pregnancy: 'yes' } }, rules).plain
+    expect(pregnant.before).not.toContain(pregnant.why)
+    const open = assess({ ...woman, screening: { ...quietScreening, pregnancy: 'unknown' } }, rules).plain
+    expect(open.before.filter(line => /pregnant/.test(line))).toEqual(['Tell us if you may be pregnant. We may ask for a test first.'])
   })
 })

@@ -45,4 +45,20 @@ describe('Unless', () => {
     const reacted = unless({ ...marta, screening: { ...quietScreening, earlierReaction: 'yes', reactionKind: 'allergic-like', reactionSeverity: 'moderate', reactionAgent: 'gadobutrol' } })
     expect(reacted.find(clause => clause.flips === 'earlierReaction')?.text).toMatch(/no longer waits .*premedication .*no longer needed; gadobutrol is suggested instead/)
   })
+
+  it('says nothing of dialysis that follows from the answer itself', () => {
+    expect(unless(marta).some(clause => clause.flips === 'dialysis')).toBe(false)
+    const onDialysis = unless({ ...marta, setting: 'emergency', screening: { ...quietScreening, dialysis: 'hemodialysis' } })
+    expect(onDialysis.map(clause => clause.text).join()).not.toMatch(/dialysis after the exam is no longer needed/)
+  })
+
+  it('names the sex for the equation where it decides', () => {
+    const open = unless({ ...marta, patient: { ...marta.patient, sex: 'unknown' }, readings: [creatinine(2, '2026-11-28T14:00:00Z')] })
+    expect(open.map(clause => clause.text)).toContain('The sex for the equation is male: then contrast no longer waits for a radiologist\'s word')
+  })
+
+  it('says what follows once an open pregnancy question is answered with no', () => {
+    const open = unless({ ...marta, patient: { ...marta.patient, birthDate: '1996-05-05' }, screening: { ...quietScreening, pregnancy: 'unknown' } })
+    expect(open.map(clause => clause.text).join()).toMatch(/turns out not to be pregnant: then contrast no longer waits for a radiologist's word/)
+  })
 })
