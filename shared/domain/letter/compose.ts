@@ -73,23 +73,32 @@ function frame(
   input: Common, kind: LetterKind, mark: DecidableOutcome | null, title: string, body: Pick<Letter, 'opening' | 'sections'>,
 ): Letter {
   const { department } = input.policy
+  // A parent or guardian reads of a child's arm, kidneys and reactions.
+  const opening = isChild(input) && mark !== null ? [...body.opening, 'In this letter, “you” means your child.'] : body.opening
   return {
-    kind, language: input.language, from: department.name, to: addressee(input), mark, title, ...body, caution,
+    kind, language: input.language, from: department.name, to: addressee(input), mark, title, opening, sections: body.sections, caution,
     neutralSubject: neutralSubject(input.policy),
     detailedSubject: `${title} (${department.name})`,
   }
 }
 
-/** A child's letter goes to a parent or guardian. */
-function addressee({ patient, policy, now }: Common): string {
+function isChild({ patient, policy, now }: Common): boolean {
   const age = ageBounds(patient.birthDate, now, policy.department.timeZone)
-  return age !== null && age.oldest < 18 ? `the parent or guardian of ${patient.fullName}` : patient.fullName
+  return age !== null && age.oldest < 18
 }
 
-function planTitle({ exam, decision }: Common): string {
+/** A child's letter goes to a parent or guardian. */
+function addressee(input: Common): string {
+  return isChild(input) ? `the parent or guardian of ${input.patient.fullName}` : input.patient.fullName
+}
+
+function planTitle({ exam, decision, assessment }: Common): string {
   const scan = plainScanName(exam.region)
   switch (decision.contrast) {
-    case 'none': return `Your ${scan} does not need contrast, and here is why`
+    // Where guidance asks for contrast and something holds it back, the scan would need it.
+    case 'none': return assessment.guidance?.status === 'answered' && assessment.guidance.contrast === 'none'
+      ? `Your ${scan} does not need contrast, and here is why`
+      : `Your ${scan} will be done without contrast, and here is why`
     case 'intra-articular': return `Your ${scan} will use contrast in the joint, and here is why`
     case 'iv-hepatobiliary': return `Your ${scan} will use a liver contrast, and here is why`
     default: return `Your ${scan} will use contrast, and here is why`
@@ -104,7 +113,7 @@ function planOf(input: Common, slot: LetterSlot): Pick<Letter, 'opening' | 'sect
       appointmentSection(slot, input.policy),
       beforeSection(contrast, input.assessment, input.needs, input.policy),
       bringSection(input.needs),
-      ...aboutContrastSections(contrast, agent?.macrocyclic ?? false, input.assessment),
+      ...aboutContrastSections(contrast, agent?.macrocyclic ?? false, input.assessment, input.policy),
       tellUsSection(contrast, pregnancyAsked(input.patient, input.policy, input.now)),
       callSection(input.policy),
     ],
@@ -121,7 +130,7 @@ function afterLetter(input: Common, given: LetterGiven): Letter {
       : ['The scan was done in another way than planned.'],
     sections: [
       usedSection(given, used),
-      afterSection(given.contrast, breastfeeding),
+      afterSection(given.contrast, breastfeeding, input.assessment, input.policy),
       ...warningSection(given.contrast, input.policy),
       callSection(input.policy),
     ],

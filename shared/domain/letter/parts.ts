@@ -15,7 +15,7 @@ export const caution = 'This page explains a decision made by your imaging docto
 export interface LetterSlot { startsAt: string, place: string }
 
 /** What a letter takes from the assessment. */
-export type LetterAssessment = Pick<Assessment, 'plain' | 'suggestion' | 'kidney' | 'findings'>
+export type LetterAssessment = Pick<Assessment, 'plain' | 'suggestion' | 'guidance' | 'kidney' | 'findings'>
 
 function section(id: LetterSection['id'], heading: string, paragraphs: string[], items: string[] = []): LetterSection {
   return { id, heading, paragraphs, items }
@@ -56,11 +56,12 @@ export function beforeSection(contrast: DecidableOutcome, assessment: LetterAsse
   return section('before', 'Before your scan', paragraphs, items)
 }
 
-function bloodTest({ kidney }: LetterAssessment, needs: readonly Need[], policy: Policy): string[] {
+function bloodTest({ kidney, findings }: LetterAssessment, needs: readonly Need[], policy: Policy): string[] {
   if (needs.some(need => need.kind === 'creatinine') || kidney.status === 'dialysis') return []
   if (kidney.currency === 'current' && kidney.creatinine !== null && kidney.gateEgfr !== null) {
     const day = DateTime.fromISO(kidney.creatinine.collectedAt, { zone: policy.department.timeZone }).setLocale('en-US').toFormat('LLLL d')
-    return [kidneyHeld(kidney, policy)
+    const asked = kidneyHeld(kidney, policy) || findings.some(found => found.topic === 'kidney' && found.asksRadiologist)
+    return [asked
       ? `A doctor looked at your blood test from ${day}. They agreed that you can have contrast.`
       : `Your blood test from ${day} gives no reason to leave contrast out.`]
   }
@@ -86,7 +87,7 @@ export function bringSection(needs: readonly Need[]): LetterSection {
 }
 
 /** What contrast is and does, by the way it is given; nothing for a scan without. */
-export function aboutContrastSections(contrast: DecidableOutcome, macrocyclic: boolean, assessment: LetterAssessment): LetterSection[] {
+export function aboutContrastSections(contrast: DecidableOutcome, macrocyclic: boolean, assessment: LetterAssessment, policy: Policy): LetterSection[] {
   if (contrast === 'none') return []
   const heading = 'What to know about contrast'
   if (contrast === 'intra-articular') {
@@ -104,6 +105,9 @@ export function aboutContrastSections(contrast: DecidableOutcome, macrocyclic: b
     'Most people feel nothing. A few feel warm or get an itch for a short time. Strong reactions are rare, and we are ready to treat them.',
     `${macrocyclic ? 'The type we use holds its metal, gadolinium, most tightly.' : 'Contrast holds a metal called gadolinium.'} `
     + 'A trace can stay in the body. With healthy kidneys, no harm from this has been proven.',
+    ...(kidneyHeld(assessment.kidney, policy)
+      ? ['With very weak kidneys, a rare skin illness has been seen, nearly always with older types of contrast. Your doctors thought about this.']
+      : []),
     ...breastfeeding,
   ])]
 }
@@ -125,17 +129,27 @@ export function callSection(policy: Policy): LetterSection {
   return section('call', 'Who to call', [`Call ${policy.department.name} at ${policy.department.phone}.`, `We are here ${policy.department.callHours}.`])
 }
 
+/** How contrast given by vein leaves the body; with weak kidneys it is not gone within a day. */
+function leavesBody(contrast: DecidableOutcome, { kidney }: LetterAssessment, policy: Policy): string {
+  if (kidney.status === 'dialysis') return 'Your dialysis helps to clear the contrast. Keep your dialysis plan. You can eat and drink as you did before.'
+  const slow = kidneyHeld(kidney, policy)
+  if (contrast === 'iv-hepatobiliary') return `The contrast leaves your body through the liver and the kidneys${slow ? '. When kidneys work less well, this takes a few days.' : ', most of it within a day.'}`
+  return slow
+    ? 'The contrast leaves your body in the urine. When kidneys work less well, this takes a few days. You can eat and drink as you did before.'
+    : 'Most of the contrast leaves your body in the urine within a day. You can eat and drink as usual.'
+}
+
 /** What to expect once home, by what was really given. */
-export function afterSection(contrast: DecidableOutcome, breastfeeding: readonly string[]): LetterSection {
+export function afterSection(
+  contrast: DecidableOutcome, breastfeeding: readonly string[], assessment: LetterAssessment, policy: Policy,
+): LetterSection {
   const result = 'The doctor who asked for the scan will tell you the result.'
   if (contrast === 'none') return section('after', 'What to expect now', ['You can go on with your day as usual.', result])
   if (contrast === 'intra-articular') {
     return section('after', 'What to expect now', ['The joint may feel full or sore for a day or two. Rest it today.', result])
   }
   return section('after', 'What to expect now', [
-    contrast === 'iv-hepatobiliary'
-      ? 'The contrast leaves your body through the liver and the kidneys, most of it within a day.'
-      : 'Most of the contrast leaves your body in the urine within a day. You can eat and drink as usual.',
+    leavesBody(contrast, assessment, policy),
     ...breastfeeding, result,
   ])
 }

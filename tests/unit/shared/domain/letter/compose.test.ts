@@ -45,6 +45,7 @@ describe('the letter before the scan', () => {
 
   it('explains the doctor\'s choice and not the suggestion where they differ', () => {
     const differs = composeLetter({ kind: 'before', slot, ...common('none') })
+    expect(differs.title).toBe('Your brain scan will be done without contrast, and here is why')
     expect(differs.opening).toEqual(['A doctor looked at your case. They chose to do the scan without contrast.'])
   })
 
@@ -61,11 +62,16 @@ describe('the letter before the scan', () => {
   it('says that a doctor agreed where kidney function held contrast', () => {
     const low = composeLetter({ kind: 'before', slot, ...common('iv-with-and-without', { readings: [creatinine(2.4, '2026-11-30T14:00:00Z')] }) })
     expect(bodyOf(low)).toContain('They agreed that you can have contrast.')
+    expect(bodyOf(low)).toContain('With very weak kidneys, a rare skin illness has been seen')
+    expect(bodyOf(letter)).not.toMatch(/skin illness/)
+    const inpatient = composeLetter({ kind: 'before', slot, ...common('iv-with-and-without', { setting: 'inpatient', readings: [creatinine(0.94, '2026-12-01T00:00:00Z')] }) })
+    expect(bodyOf(inpatient)).toContain('They agreed that you can have contrast.')
   })
 
   it('goes to a parent or guardian for a child', () => {
     const child = composeLetter({ kind: 'before', slot, ...common('none', { patient: { birthDate: '2018-05-20', sex: 'male', weightKg: 25, weightAt: null, heightCm: 130, heightAt: null } }) })
     expect(child.to).toBe('the parent or guardian of Marta Lindqvist')
+    expect(child.opening.at(-1)).toBe('In this letter, “you” means your child.')
   })
 
   it('carries names as text, whatever they hold', () => {
@@ -85,6 +91,15 @@ describe('the letter after the scan', () => {
     expect(bodyOf(letter)).toContain('Its name is gadobutrol.')
     expect(bodyOf(letter)).toMatch(/call 911 at once/)
     expect(bodyOf(letter)).toMatch(/skin gets hard or tight/)
+  })
+
+  it('promises no quick way out of the body to weak kidneys or on dialysis', () => {
+    const after = (inputs: Parameters<typeof common>[1]) => bodyOf(composeLetter({ kind: 'after', given: usual, ...common('iv-with-and-without', inputs) }))
+    expect(after({})).toMatch(/in the urine within a day/)
+    expect(after({ readings: [creatinine(2.4, '2026-11-30T14:00:00Z')] })).toMatch(/this takes a few days/)
+    const dialysis = after({ screening: { ...quietScreening, dialysis: 'hemodialysis' } })
+    expect(dialysis).toMatch(/Your dialysis helps to clear the contrast/)
+    expect(dialysis).not.toMatch(/urine|within a day/)
   })
 
   it('says so where none was used, with no warning about contrast', () => {
