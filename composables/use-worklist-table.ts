@@ -38,7 +38,7 @@ export function useWorklistTable<Row extends { id: string }>(data: Ref<Row[]>, c
       id: column.id, header: column.label, enableSorting: column.value !== undefined, sortFn: 'alphanumeric', sortDescFirst: false,
     }))),
     data: data.value,
-    getRowId: row => row.id,
+    getRowId: (row: Row) => row.id,
   })
   // The table reads its options without tracking them: hand new rows over at once and say that they changed.
   const changes = ref(0)
