@@ -5,6 +5,7 @@ import { computeDose } from '#shared/domain/contrast/dose'
 import { starterAgents } from '#shared/domain/contrast/agents'
 import { isIntravenous, usesContrast } from '#shared/domain/contrast/outcome'
 import { weighDecision } from '#shared/domain/request/decision'
+import { isTransition } from '#shared/domain/request/lifecycle'
 import type { approvalSchema } from '#shared/schemas/requests'
 import type { WriteResult } from '#shared/types/views'
 import type { Database } from '#server/database/client'
@@ -22,7 +23,7 @@ import type { RulesInForce } from '../rules/in-force'
 import { earlierAnswer } from '../transaction'
 import { gatherInputs, runAssessment, storeAssessment } from './assess-request'
 import type { Assessed } from './assess-request'
-import { changeRequest } from './change'
+import { changeRequest, conflictError } from './change'
 import type { ChangeOutcome } from './change'
 import { loadRequest, scopeOf } from './load'
 import type { LoadedRequest } from './load'
@@ -54,7 +55,10 @@ export async function approveRequest({ ctx, input }: { ctx: ServiceContext, inpu
     version: input.version,
     action: 'request.approve',
     step: null,
-    apply: async (tx, { request, patient }): Promise<ChangeOutcome> => {
+    apply: async (tx, loaded): Promise<ChangeOutcome> => {
+      const { request, patient } = loaded
+      // What was decided stays as it was assessed.
+      if (!isTransition(request.state, 'approve')) throw conflictError(loaded)
       const inputs = await gatherInputs(tx, ctx.now, { form: request.form, record, patient, plannedAt: request.slotStartsAt })
       const fresh = runAssessment(inputs, inForce)
       const seen = await currentAssessment(tx, request)

@@ -1,4 +1,7 @@
 import { eq } from 'drizzle-orm'
+import { withEarlier } from '#shared/domain/record/with-earlier'
+import { openStates } from '#shared/domain/request/lifecycle'
+import type { RequestState } from '#shared/domain/request/lifecycle'
 import type { AssessmentView } from '#shared/types/views'
 import { requests } from '#server/database/schema/requests'
 import { recordAudit } from '../audit/record'
@@ -13,16 +16,16 @@ import { loadRequest, scopeOf } from './load'
 
 /**
  * Reads the hospital record anew and answers with the assessment of the form as saved. The stored record is replaced only by a
- * reading that reached it; the request's version stays, since nothing a person wrote has changed.
+ * reading that reached it, and never on a request that is over; its version stays, since nothing a person wrote has changed.
  */
 export async function refreshAssessment({ ctx, input }: { ctx: ServiceContext, input: { id: string } }): Promise<AssessmentView> {
   const { request, patient } = await loadRequest(ctx.db, input.id)
   permitRequest(ctx, 'request.assess', scopeOf(request))
-  const reading = await readPatientRecord(ctx, patient.ehrId)
+  const reading = withEarlier(await readPatientRecord(ctx, patient.ehrId), request.record)
   const usable = reading.state !== 'unreachable'
   const inForce = await rulesInForce(ctx.db, ctx.now)
   return await inTransaction(ctx, async (tx) => {
-    if (usable) {
+    if (usable && (openStates as readonly RequestState[]).includes(request.state)) {
       // Another date of birth than the one confirmed is for a person to look at, not to be taken over unseen.
       const samePerson = Boolean(reading.patient?.birthDate) && reading.warnings.every(warning => warning.id !== 'birth-date-differs')
       if (samePerson) await keepPatient(tx, ctx, reading)
