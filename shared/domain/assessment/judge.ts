@@ -3,6 +3,7 @@ import type { ContrastOutcome, DecidableOutcome } from '../contrast/outcome'
 import type { AgentChoice, AgentId } from '../contrast/types'
 import type { ClinicalQuestion, GuidanceResult } from '../guidance/types'
 import type { KidneyFunction } from '../kidney/types'
+import type { Policy } from '../policy/types'
 import type { SafetyContext } from '../safety/context'
 import type { SafetyFinding } from '../safety/types'
 import { usesContrast } from '../contrast/outcome'
@@ -10,6 +11,7 @@ import { rankAgents } from '../contrast/rank'
 import { decide } from '../guidance/decide'
 import { evaluateKidney } from '../kidney/evaluate'
 import { ageBounds } from '../safety/age'
+import { finding } from '../safety/finding'
 import { findSafety } from '../safety/index'
 import { deriveNeeds } from './derive-needs'
 
@@ -73,16 +75,17 @@ export function judge(inputs: AssessmentInputs, rules: AssessmentRules, options:
     policy,
     agents: rules.agents,
   }
-  const findings = findSafety(context)
-  const turnedBy = options.decided ? null : turningFinding(wanted, findings)
+  const found = findSafety(context)
+  const turnedBy = options.decided ? null : turningFinding(wanted, found)
   const suggestion = turnedBy?.turns ?? wanted
   const ranked = suggestion === 'discuss' ? wanted : suggestion
   const agents = ranked !== null && usesContrast(ranked)
     ? rankAgents({
-        outcome: ranked, policy, agents: rules.agents, barred: barredAgents(findings),
+        outcome: ranked, policy, agents: rules.agents, barred: barredAgents(found),
         patient: { ageYears: age?.youngest ?? null, weightKg: inputs.patient.weightKg },
       })
     : null
+  const findings = agents !== null && agents.best === null && !found.some(item => item.id === 'condition-nsf') ? [noAgentFits(policy), ...found] : found
   return {
     question, guidance, wanted, suggestion, turnedBy, kidney, findings, agents,
     needs: deriveNeeds({
@@ -92,6 +95,16 @@ export function judge(inputs: AssessmentInputs, rules: AssessmentRules, options:
     }),
     asksRadiologist: suggestion === 'discuss' || findings.some(found => found.asksRadiologist),
   }
+}
+
+/** Contrast is asked for and no stocked agent can give it: somebody has to choose otherwise. */
+function noAgentFits(policy: Policy): SafetyFinding {
+  return finding({
+    id: 'condition-no-agent-fits', topic: 'condition', severity: 'hold',
+    text: 'No stocked agent fits this exam and this patient: a radiologist chooses another way.',
+    plain: 'None of our types of contrast fits you. A doctor decides what to do.',
+    addsNeeds: ['radiologist-word'], asksRadiologist: true, source: policy.stockedAgents.source,
+  })
 }
 
 /** "Without contrast" outweighs "to be discussed"; nothing turns a scan that uses none. */

@@ -76,7 +76,7 @@ function preparationEffect(base: Judgement, other: Judgement, flips: string): st
   }
   if (added.length > 0) words.push(`${listed(added)} ${added.length === 1 ? 'is' : 'are'} needed`)
   if (dropped.length > 0) words.push(`${listed(dropped)} ${dropped.length === 1 ? 'is' : 'are'} no longer needed`)
-  if (best && base.agents && best.agent !== base.agents.best) words.push(`${best.name} is suggested instead`)
+  if (best && base.agents && best.agent !== base.agents.best) words.push(base.agents.best === null ? `${best.name} fits` : `${best.name} is suggested instead`)
   return words.join('; ')
 }
 

@@ -186,6 +186,17 @@ describe('the words of one sheet', () => {
     expect(inpatient).not.toMatch(/No new lab work/)
   })
 
+  it('say so and ask a radiologist where no stocked agent fits', () => {
+    const screening = { ...quietScreening, earlierReaction: 'yes' as const, reactionAgent: 'gadoxetate' as const, reactionKind: 'physiologic' as const, reactionSeverity: 'severe' as const }
+    const liver = { ...marta, questionId: 'liver-lesion-characterize', answers: { fnhAdenoma: 'yes' } }
+    const none = assess({ ...liver, screening }, rules)
+    expect(none.agents?.best).toBeNull()
+    expect(none.asksRadiologist).toBe(true)
+    expect(texts({ ...liver, screening })).toContain('No stocked agent fits this exam and this patient: a radiologist chooses another way.')
+    expect(none.needs.map(need => need.kind)).toContain('radiologist-word')
+    expect(texts(liver)).not.toMatch(/No stocked agent/)
+  })
+
   it('tell the patient each thing once', () => {
     const woman = { ...marta, patient: { ...marta.patient, birthDate: '1996-05-05' } }
     const pregnant = assess({ ...woman, screening: { ...quietScreening, pregnancy: 'yes' } }, rules).plain
