@@ -27,7 +27,7 @@ export async function prepareCast({ staff, place }) {
     recordNumber: '40-2217', questionId: 'first-seizure-adult', answers: { tumorInfection: 'yes' },
     form: { priority: 'urgent', history: 'Single generalized seizure 24 November, witnessed. Left breast cancer treated 2021, on letrozole. Neurological examination normal. CT head without contrast normal on the day.' },
   })
-  cast.empty = await clinician.draft({ recordNumber: '40-2274', questionId: null, form: { history: '', screening: undefined, screeningConfirmed: false } })
+  cast.empty = await clinician.begin('40-2274')
 
   cast.sent = await send('40-2217', 'first-seizure-adult', { answers: { tumorInfection: 'yes' }, form: { priority: 'urgent', detailsByEmail: true } })
   cast.dialysis = await send('40-2231', 'spine-infection', { form: { priority: 'stat' }, screening: { dialysis: 'hemodialysis', kidneyDisease: 'yes' } })

@@ -18,6 +18,15 @@ const viewSchema = writeSchema.extend({
   decision: z.looseObject({ agent: z.string().nullable(), volumeMl: z.number().nullable(), contrast: z.string().nullable() }).nullable(),
 })
 
+const guidanceSchema = z.looseObject({
+  guidance: z.looseObject({
+    questions: z.array(z.looseObject({
+      id: z.string(),
+      deciders: z.array(z.looseObject({ id: z.string(), kind: z.string(), options: z.array(z.looseObject({ id: z.string() })).optional() })),
+    })),
+  }),
+})
+
 /** No to every safety question: what a healthy patient's clinician answers. */
 const healthy = {
   kidneyDisease: 'no', kidneyRiskFactor: 'no', dialysis: 'none', acuteIllness: 'no', liverDisease: 'no', earlierReaction: 'no', asthma: 'no',
@@ -27,6 +36,7 @@ const healthy = {
 export interface Asking {
   recordNumber: string
   questionId: string
+  /** What decides, where it is not the usual: no to each, or the first choice. */
   answers?: Record<string, string>
   screening?: Record<string, unknown>
   /** Anything else of the form. */
@@ -35,7 +45,9 @@ export interface Asking {
 
 export interface Staff {
   visitor: Visitor
-  /** A draft of one patient, with the question step filled in. */
+  /** A draft with nothing answered yet. */
+  begin: (recordNumber: string) => Promise<Written>
+  /** A draft of one patient, answered to the end. */
   draft: (asking: Asking) => Promise<Written>
   /** A request as sent to imaging. */
   send: (asking: Asking) => Promise<Written>
@@ -69,19 +81,27 @@ export async function staff(email: string, at = origin()): Promise<Staff> {
     return await must(writeSchema, await visitor.send(method, `/api/requests/${request.id}/${name}`, body, { version, ...options }), name)
   }
 
-  const draft: Staff['draft'] = async ({ recordNumber, questionId, answers = {}, screening = {}, form = {} }) => {
+  const begin: Staff['begin'] = async (recordNumber) => {
     const found = await must(z.object({ patients: z.array(z.object({ ehrId: z.string() })) }), await visitor.send('POST', '/api/patient-searches', { recordNumber }), 'searching')
     const me = await must(z.object({ practices: z.array(z.object({ id: z.string() })) }), await visitor.get('/api/me'), 'reading who I am')
-    const begun = await must(writeSchema, await visitor.send('POST', '/api/requests', {
+    return await must(writeSchema, await visitor.send('POST', '/api/requests', {
       ehrPatientId: found.patients[0]?.ehrId, practiceId: me.practices[0]?.id, confirmed: true, copyOf: null,
     }), 'beginning a request')
+  }
+
+  const draft: Staff['draft'] = async ({ recordNumber, questionId, answers = {}, screening = {}, form = {} }) => {
+    const begun = await begin(recordNumber)
+    const { guidance } = await must(guidanceSchema, await visitor.get('/api/guidance'), 'reading the guidance')
+    const deciders = guidance.questions.find(question => question.id === questionId)?.deciders ?? []
+    const usual = Object.fromEntries(deciders.map(({ id, options }) => [id, options?.[0]?.id ?? 'no']))
     const before = await view(begun)
     const asked = new Set(Object.keys(before.form.screening))
     const hints = Object.fromEntries((before.record?.hints ?? []).filter(hint => asked.has(hint.field)).map(hint => [hint.field, hint.value]))
     return await write('form', begun, {
       form: {
         ...before.form,
-        questionId, answers,
+        questionId,
+        answers: { ...usual, ...answers },
         history: 'Headaches for six weeks, worse in the morning. Neurological examination normal.',
         screening: { ...before.form.screening, ...healthy, ...hints, ...screening },
         screeningConfirmed: true,
@@ -92,6 +112,7 @@ export async function staff(email: string, at = origin()): Promise<Staff> {
 
   return {
     visitor,
+    begin,
     draft,
     view,
     send: async asking => await write('submission', await draft(asking), {}),
