@@ -114,14 +114,19 @@ export const requests = pgTable('requests', {
   /** The radiologists' queue: most pressing first. */
   index('requests_review_idx').on(table.priorityRank, table.dueAt, table.id)
     .where(sql`${table.state} in ('sent', 'queried', 'reopened')`),
-  /** A practice's own list, newest first. */
-  index('requests_practice_idx').on(table.practiceId, table.updatedAt.desc(), table.id.desc())
+  /** A practice's own list, newest first. Nulls first, as `order by … desc` means: the other order would be sorted anew for each page. */
+  index('requests_practice_idx').on(table.practiceId, table.updatedAt.desc().nullsFirst(), table.id.desc().nullsFirst())
     .where(sql`${table.state} <> 'discarded'`),
+  /** The department's own list, newest first. */
+  index('requests_changed_idx').on(table.updatedAt.desc().nullsFirst(), table.id.desc().nullsFirst())
+    .where(sql`${table.state} <> 'draft' and ${table.state} <> 'discarded'`),
   /** What waits for a practice's answer: the badge of its people. */
   index('requests_awaiting_idx').on(table.practiceId).where(sql`${table.awaiting} = 'ordering'`),
   /** The booking desk: by slot, unbooked first. */
   index('requests_preparation_idx').on(table.slotStartsAt, table.id)
     .where(sql`${table.state} in ('approved', 'booked', 'reopened', 'queried')`),
+  /** Exams that are over and wait for their letter. */
+  index('requests_done_idx').on(table.slotStartsAt, table.id).where(sql`${table.state} = 'done'`),
   index('requests_patient_idx').on(table.patientId, table.createdAt.desc()),
   check('requests_reference_check', sql`(${table.state} in ('draft', 'discarded')) or (${table.reference} is not null and ${table.signedById} is not null and ${table.sentAt} is not null)`),
   check('requests_slot_check', sql`(${table.slotStartsAt} is null) = (${table.slotEndsAt} is null) and (${table.slotEndsAt} is null or ${table.slotEndsAt} > ${table.slotStartsAt})`),
@@ -252,7 +257,7 @@ export const letters = pgTable('letters', {
   createdById: uuid('created_by_id').references(() => users.id),
 }, table => [
   index('letters_request_idx').on(table.requestId, table.queuedAt.desc()),
-  index('letters_failed_idx').on(table.queuedAt.desc(), table.id.desc()).where(sql`${table.state} = 'failed'`),
+  index('letters_failed_idx').on(table.queuedAt.desc().nullsFirst(), table.id.desc().nullsFirst()).where(sql`${table.state} = 'failed'`),
 ])
 
 /** Links in delivered letters. Only the hash of a token is kept: a copy of the database opens no page. */

@@ -25,11 +25,12 @@ export const auditEvents = pgTable('audit_events', {
   outcome: text('outcome').notNull().default('ok'),
   requestId: text('request_id').notNull(),
 }, table => [
-  index('audit_events_actor_idx').on(table.actorId, table.id.desc()),
-  index('audit_events_object_idx').on(table.objectType, table.objectId, table.id.desc()),
-  index('audit_events_patient_idx').on(table.patientId, table.id.desc()),
-  index('audit_events_action_idx').on(table.action, table.id.desc()),
-  index('audit_events_reference_idx').on(table.reference, table.id.desc()).where(sql`${table.reference} is not null`),
+  // Nulls first, as `order by id desc` means: the other order would be sorted anew for each page.
+  index('audit_events_actor_idx').on(table.actorId, table.id.desc().nullsFirst()),
+  index('audit_events_object_idx').on(table.objectType, table.objectId, table.id.desc().nullsFirst()),
+  index('audit_events_patient_idx').on(table.patientId, table.id.desc().nullsFirst()),
+  index('audit_events_action_idx').on(table.action, table.id.desc().nullsFirst()),
+  index('audit_events_reference_idx').on(table.reference, table.id.desc().nullsFirst()).where(sql`${table.reference} is not null`),
   index('audit_events_at_idx').on(table.at),
   check('audit_events_outcome_check', sql`${table.outcome} in ('ok', 'refused')`),
   check('audit_events_actor_check', sql`${table.actorKind} in ('user', 'system', 'patient', 'nobody')`),
