@@ -18,11 +18,11 @@ const turnedInShort: Record<string, string> = {
 /** The headline: exam, contrast and reason, or what is still needed. No full stop. */
 export function sentenceOf({ question, guidance, suggestion, turnedBy }: Judgement): string {
   if (question === null) return 'Choose the clinical question: it decides whether contrast helps'
-  if (guidance === null || guidance.status === 'needs-answers' || suggestion === null) {
+  if (guidance === null || suggestion === null) {
     const open = guidance?.status === 'needs-answers' ? guidance.deciders.length : 1
     return `${question.exam}, with or without contrast: ${open === 1 ? 'one answer decides' : `${['two', 'three'][open - 2] ?? open} answers decide`}`
   }
-  const reason = turnedBy === null ? guidance.inShort : turnedInShort[turnedBy.id] ?? 'a safety finding holds contrast back'
+  const reason = turnedBy === null ? (guidance.status === 'answered' ? guidance.inShort : 'what decides is not known') : turnedInShort[turnedBy.id] ?? 'a safety finding holds contrast back'
   // "MRI pituitary, dynamic, without contrast", "MRI pancreas with MRCP, without contrast": such names need a comma after them.
   const comma = /,| with /.test(question.exam) ? ',' : ''
   return `${question.exam}${comma} ${outcomeWords[suggestion].phrase}, because ${reason}`
@@ -35,6 +35,9 @@ export function becauseClauses(judged: Judgement): Clause[] {
   if (question !== null && guidance?.status === 'answered') {
     const note = guidance.despiteUnknown ? ' What is not known would not change this.' : ''
     clauses.push({ text: guidance.because + note, source: mainSource(question.sources) })
+  }
+  else if (guidance !== null && wanted === 'discuss') {
+    clauses.push({ text: 'The answers that decide about contrast are not known: a radiologist decides.', source: null })
   }
   for (const found of findings) {
     if (weighs(found) && found.topic !== 'kidney' && found.topic !== 'dialysis') clauses.push({ text: found.text, source: found.source })
@@ -87,7 +90,9 @@ function notNeeded({ suggestion, kidney, needs, findings }: Judgement): Clause[]
 
 /** The same for the patient: why, and what to do before. */
 export function plainVersion({ guidance, turnedBy, needs, findings, suggestion }: Judgement): Assessment['plain'] {
-  const why = turnedBy !== null ? turnedBy.plain : guidance?.status === 'answered' ? guidance.plain : ''
+  const why = turnedBy !== null
+    ? turnedBy.plain
+    : guidance?.status === 'answered' ? guidance.plain : suggestion === 'discuss' ? 'Some answers that matter are not known. A doctor decides about contrast.' : ''
   const before = needs.flatMap(need => plainNeed(need.kind, { findings, suggestion }) ?? [])
   return { why, before: [...new Set(before)].filter(line => line !== why) }
 }

@@ -54,7 +54,7 @@ export function judge(inputs: AssessmentInputs, rules: AssessmentRules, options:
   const { policy } = rules
   const question = rules.guidance.questions.find(candidate => candidate.id === inputs.questionId) ?? null
   const guidance = question === null ? null : decide(question, inputs.answers)
-  const asked = guidance?.status === 'answered' ? guidance.contrast : null
+  const asked = guidance === null ? null : askedFor(guidance, inputs)
   const wanted = options.decided?.contrast ?? asked
   const kidney = options.kidney ?? kidneyOf(inputs, rules)
   const at = inputs.plannedAt ?? inputs.now
@@ -95,6 +95,12 @@ export function judge(inputs: AssessmentInputs, rules: AssessmentRules, options:
     }),
     asksRadiologist: suggestion === 'discuss' || findings.some(found => found.asksRadiologist),
   }
+}
+
+/** What guidance asks for; where all that decides is answered "not known", nobody can answer more and a radiologist decides. */
+function askedFor(guidance: GuidanceResult, { answers }: AssessmentInputs): ContrastOutcome | null {
+  if (guidance.status === 'answered') return guidance.contrast
+  return guidance.deciders.every(decider => answers[decider] === 'unknown') ? 'discuss' : null
 }
 
 /** Contrast is asked for and no stocked agent can give it: somebody has to choose otherwise. */

@@ -186,6 +186,18 @@ describe('the words of one sheet', () => {
     expect(inpatient).not.toMatch(/No new lab work/)
   })
 
+  it('leave to a radiologist what nobody knows, with the safety findings in view', () => {
+    const unknown = { ...marta, answers: { tumorInfection: 'unknown' }, screening: { ...quietScreening, dialysis: 'unknown' as const }, patient: { ...marta.patient, weightKg: null } }
+    const made = assess(unknown, rules)
+    expect(made).toMatchObject({ suggestion: 'discuss', asksRadiologist: true })
+    expect(made.sentence).toBe('MRI brain, seizure protocol, with or without contrast, to be discussed with a radiologist, because what decides is not known')
+    expect(texts(unknown)).toMatch(/not known: a radiologist decides[^]*on dialysis is not known/)
+    expect(made.needs.map(need => need.kind)).toEqual(expect.arrayContaining(['radiologist-word', 'weight']))
+    expect(made.unless.map(clause => clause.leadsTo)).toEqual(expect.arrayContaining(['iv-with-and-without', 'none']))
+    expect(made.plain.why).toMatch(/A doctor decides/)
+    expect(assess({ ...unknown, answers: {} }, rules)).toMatchObject({ suggestion: null, sentence: expect.stringMatching(/one answer decides$/) })
+  })
+
   it('say so and ask a radiologist where no stocked agent fits', () => {
     const screening = { ...quietScreening, earlierReaction: 'yes' as const, reactionAgent: 'gadoxetate' as const, reactionKind: 'physiologic' as const, reactionSeverity: 'severe' as const }
     const liver = { ...marta, questionId: 'liver-lesion-characterize', answers: { fnhAdenoma: 'yes' } }
