@@ -22,6 +22,7 @@ const guidanceSchema = z.looseObject({
   guidance: z.looseObject({
     questions: z.array(z.looseObject({
       id: z.string(),
+      region: z.string(),
       deciders: z.array(z.looseObject({ id: z.string(), kind: z.string(), options: z.array(z.looseObject({ id: z.string() })).optional() })),
     })),
   }),
@@ -92,14 +93,16 @@ export async function staff(email: string, at = origin()): Promise<Staff> {
   const draft: Staff['draft'] = async ({ recordNumber, questionId, answers = {}, screening = {}, form = {} }) => {
     const begun = await begin(recordNumber)
     const { guidance } = await must(guidanceSchema, await visitor.get('/api/guidance'), 'reading the guidance')
-    const deciders = guidance.questions.find(question => question.id === questionId)?.deciders ?? []
-    const usual = Object.fromEntries(deciders.map(({ id, options }) => [id, options?.[0]?.id ?? 'no']))
+    const question = guidance.questions.find(candidate => candidate.id === questionId)
+    if (!question) throw new Error(`the guidance holds no ${questionId}`)
+    const usual = Object.fromEntries(question.deciders.map(({ id, options }) => [id, options?.[0]?.id ?? 'no']))
     const before = await view(begun)
     const asked = new Set(Object.keys(before.form.screening))
     const hints = Object.fromEntries((before.record?.hints ?? []).filter(hint => asked.has(hint.field)).map(hint => [hint.field, hint.value]))
     return await write('form', begun, {
       form: {
         ...before.form,
+        region: question.region,
         questionId,
         answers: { ...usual, ...answers },
         history: 'Headaches for six weeks, worse in the morning. Neurological examination normal.',
