@@ -57,6 +57,8 @@ export const sessions = pgTable('sessions', {
   expiresAt: at('expires_at').notNull(),
   endedAt: at('ended_at'),
 }, table => [
+  /** When each account was seen last. */
+  index('sessions_user_seen_idx').on(table.userId, table.lastSeenAt),
   index('sessions_open_user_idx').on(table.userId).where(sql`${table.endedAt} is null`),
 ])
 

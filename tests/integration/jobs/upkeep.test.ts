@@ -2,6 +2,7 @@ import { randomUUID } from 'node:crypto'
 import { eq, sql } from 'drizzle-orm'
 import pg from 'pg'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
+import { sessions } from '#server/database/schema/people'
 import { auditEvents, auditSeals, idempotencyKeys } from '#server/database/schema/trail'
 import { findBrokenSeal, sealDays } from '#server/services/audit/seal-days'
 import { eraseExpired } from '#server/services/upkeep/erase-expired'
@@ -85,7 +86,20 @@ describe('erasing what has run out', () => {
     })
     const [old, fresh] = [key('now() - interval \'25 hours\''), key('now() - interval \'23 hours\'')]
     await department.db.insert(idempotencyKeys).values([old, fresh])
-    expect(await eraseExpired({ ctx: systemContext(department) })).toEqual({ keys: 1, visits: 0 })
+    expect(await eraseExpired({ ctx: systemContext(department) })).toMatchObject({ keys: 1, visits: 0 })
     expect((await department.db.select().from(idempotencyKeys)).map(row => row.key)).toEqual([fresh.key])
+  })
+
+  it('lets sessions long over go, but for the one that says when somebody was seen last', async () => {
+    const session = (userId: string, idHash: string, daysAgo: number) => ({
+      idHash, userId, createdAt: ago(daysAgo), lastSeenAt: ago(daysAgo), expiresAt: ago(daysAgo - 0.5),
+    })
+    const ago = (days: number) => sql`now() - make_interval(secs => ${days * 86_400})`
+    const { orderer, scheduler } = department.people
+    await department.db.insert(sessions).values([
+      session(orderer.userId, 'long over', 200), session(orderer.userId, 'over', 10), session(scheduler.userId, 'only one', 200),
+    ])
+    expect(await eraseExpired({ ctx: systemContext(department) })).toMatchObject({ sessions: 1 })
+    expect((await department.db.select().from(sessions)).map(row => row.idHash).sort()).toEqual(['only one', 'over'])
   })
 })

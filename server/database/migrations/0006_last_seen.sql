@@ -1,0 +1,1 @@
+CREATE INDEX "sessions_user_seen_idx" ON "sessions" USING btree ("user_id","last_seen_at");
