@@ -22,6 +22,8 @@ const configSchema = z.object({
   logLevel: z.enum(['trace', 'debug', 'info', 'warn', 'error', 'silent']),
 })
 
+type Environment = Readonly<Record<string, string | undefined>>
+
 export type ServerConfig = z.output<typeof configSchema>
 
 /**
@@ -30,7 +32,7 @@ export type ServerConfig = z.output<typeof configSchema>
  *
  * @throws Error with the list of settings.
  */
-export function readConfig(raw: unknown, env: NodeJS.ProcessEnv = process.env): ServerConfig {
+export function readConfig(raw: unknown, env: Environment = process.env): ServerConfig {
   const parsed = configSchema.safeParse(asWritten(raw, env))
   if (parsed.success) return parsed.data
   const names = parsed.error.issues.map(issue => `${settingName(issue.path)}: ${issue.code === 'custom' ? issue.message : issue.code.replaceAll('_', ' ')}`)
@@ -38,21 +40,25 @@ export function readConfig(raw: unknown, env: NodeJS.ProcessEnv = process.env): 
 }
 
 /** Settings that are text, whatever they look like. */
-const texts = [['databaseUrl'], ['ownerDatabaseUrl'], ['workerDatabaseUrl'], ['migrationsDir'], ['authSecret'], ['smtp', 'host'], ['smtp', 'user'], ['smtp', 'password'], ['smtp', 'from']] as const
+const texts = ['databaseUrl', 'ownerDatabaseUrl', 'workerDatabaseUrl', 'migrationsDir', 'authSecret']
+const mailTexts = ['host', 'user', 'password', 'from']
 
 /**
  * The framework reads the environment as JSON where it can: a password of digits would become a number, and `1e5` another password.
  * So texts are taken from the environment as they were written there.
  */
-function asWritten(raw: unknown, env: NodeJS.ProcessEnv): unknown {
+function asWritten(raw: unknown, env: Environment): unknown {
   if (!isRecord(raw)) return raw
-  const whole: Record<string, unknown> = { ...raw, ...(isRecord(raw.smtp) ? { smtp: { ...raw.smtp } } : {}) }
-  for (const path of texts) {
-    const written = env[settingName(path)]
-    const [group, name] = path.length === 2 ? [whole[path[0]], path[1]] : [whole, path[0]]
-    if (written !== undefined && isRecord(group)) group[name] = written
-  }
-  return whole
+  const smtp = isRecord(raw.smtp) ? { ...raw.smtp, ...written(mailTexts, ['smtp'], env) } : raw.smtp
+  return { ...raw, ...written(texts, [], env), smtp }
+}
+
+/** Those of the named settings that the environment holds. */
+function written(names: readonly string[], group: readonly string[], env: Environment): Record<string, string> {
+  return Object.fromEntries(names.flatMap((name): [string, string][] => {
+    const text = env[settingName([...group, name])]
+    return text === undefined ? [] : [[name, text]]
+  }))
 }
 
 function isRecord(value: unknown): value is Record<string, unknown> {
