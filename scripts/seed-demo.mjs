@@ -9,6 +9,7 @@
  * Prints one line on what was done, then the demo sign-ins.
  */
 import { join } from 'node:path'
+import pg from 'pg'
 import { describeSignIns, demoUsers } from '../server/database/seed/demo-users.mjs'
 import { loadSources } from './lib/load-sources.mjs'
 import { root } from './lib/paths.mjs'
@@ -17,6 +18,11 @@ const url = process.env.NUXT_DATABASE_URL
 if (!url || process.env.NUXT_DEMO !== 'on') {
   console.error('NUXT_DATABASE_URL must name the database, and NUXT_DEMO must be "on": demo accounts share one published pass phrase.')
   process.exit(1)
+}
+
+if (await isSeeded(url)) {
+  console.log(`there already\n${describeSignIns()}`)
+  process.exit(0)
 }
 
 const sources = await loadSources()
@@ -42,4 +48,17 @@ async function seedExams({ db, pool }) {
   const { seedRequests } = await sources.load(join(root, 'server', 'database', 'seed', 'seed-requests.ts'))
   registerPool(db, pool)
   return await seedRequests(db, createEhrClient(parseEhrSettings({ baseUrl: process.env.NUXT_EHR_BASE_URL })))
+}
+
+/** Asked of the database directly, so that a later start need not load the product's sources. */
+async function isSeeded(connectionString) {
+  const client = new pg.Client({ connectionString })
+  await client.connect()
+  try {
+    const wanted = process.env.NUXT_EHR_BASE_URL ? ['demo-department', 'demo-requests'] : ['demo-department']
+    const { rows } = await client.query('select key from installation where key = any ($1)', [wanted])
+    return rows.length === wanted.length
+  } finally {
+    await client.end()
+  }
 }
