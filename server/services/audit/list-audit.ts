@@ -99,9 +99,16 @@ function viewOf(row: typeof auditEvents.$inferSelect): AuditView {
     reference: row.reference,
     objectType: row.objectType,
     objectId: row.objectId,
-    detail: row.detail,
+    detail: withoutClinicalFacts(row.detail),
     outcome: row.outcome === 'refused' ? 'refused' : 'ok',
   }
+}
+
+/** Kept in the trail, not shown with it: whoever administers accounts has no need of what a patient was given. */
+const clinicalFacts = new Set(['contrast', 'agent', 'suggestion', 'outcome', 'given', 'reaction', 'extravasation', 'need'])
+
+function withoutClinicalFacts(detail: Record<string, unknown>): Record<string, unknown> {
+  return Object.fromEntries(Object.entries(detail).filter(([name]) => !clinicalFacts.has(name)))
 }
 
 function isAction(text: string): text is AuditAction {

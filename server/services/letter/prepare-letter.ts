@@ -25,7 +25,7 @@ export interface PreparedLetter { letter: LetterRecord, to: string, detailed: bo
 export async function prepareLetter(ctx: ServiceContext, input: { letterId: string, policy: Policy }): Promise<PreparedLetter | null> {
   return await inTransaction(ctx, async (tx) => {
     const held = await holdLetter(tx, input.letterId)
-    const { letter, patient } = held
+    const { letter, patient, request } = held
     if (letter.state !== 'queued') return null
     if (letter.toAddress === null || letter.toAddress !== patient.email) {
       await readdress(tx, ctx, held)
@@ -35,7 +35,8 @@ export async function prepareLetter(ctx: ServiceContext, input: { letterId: stri
     await tx.insert(letterLinks).values({
       tokenHash: hashSecret(token),
       letterId: letter.id,
-      expiresAt: sql`now() + make_interval(days => ${input.policy.links.value.validDays})`,
+      // An exam far ahead must not outlive the way to its explanation.
+      expiresAt: sql`greatest(now(), ${request.slotStartsAt?.toISOString() ?? null}::timestamptz) + make_interval(days => ${input.policy.links.value.validDays})`,
     })
     await tx.update(letters).set({ attempts: sql`${letters.attempts} + 1` }).where(eq(letters.id, letter.id))
     return { letter, to: letter.toAddress, detailed: letter.detailed && patient.detailsByEmail === true, token }

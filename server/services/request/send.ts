@@ -77,10 +77,16 @@ async function keepConsent(tx: Database, ctx: ServiceContext, { form, patientId,
   const actor = userOf(ctx)
   const kept = await tx.update(patients).set({
     ...(form.patientEmail ? { email: form.patientEmail } : {}),
-    ...(form.detailsByEmail === null ? {} : { detailsByEmail: form.detailsByEmail, consentAskedById: actor.userId, consentAskedAt: ctx.now }),
+    ...consentColumns(form, actor.userId, ctx.now),
   }).where(and(eq(patients.id, patientId), or(isNull(patients.consentAskedAt), lte(patients.consentAskedAt, updatedAt)))).returning({ id: patients.id })
   if (kept.length === 0) return
   await recordAudit(tx, ctx, { action: 'patient.consent', objectType: 'request', objectId: id, patientId, practiceId, detail: { detailsByEmail: form.detailsByEmail, address: form.patientEmail !== null } })
+}
+
+/** Consent is to an address: another one without a fresh answer means nobody was asked. */
+function consentColumns(form: RequestRecord['form'], askedById: string, now: Date) {
+  if (form.detailsByEmail !== null) return { detailsByEmail: form.detailsByEmail, consentAskedById: askedById, consentAskedAt: now }
+  return form.patientEmail ? { detailsByEmail: null, consentAskedById: null, consentAskedAt: null } : {}
 }
 
 /** WF-26-004318: the year in the department's zone, then a number never used twice. */
