@@ -2,6 +2,7 @@ import { hash } from '@node-rs/argon2'
 import { eq, sql } from 'drizzle-orm'
 import { starterQuestions } from '../../../shared/domain/guidance/questions'
 import { starterPolicy } from '../../../shared/domain/policy/defaults'
+import { policySchema } from '../../../shared/schemas/policy'
 import type { Database } from '../client'
 import { memberships, practices, users } from '../schema/people'
 import { guidanceVersions, policyVersions, scanners } from '../schema/rules'
@@ -49,7 +50,7 @@ export async function seedDepartment(db: Database): Promise<boolean> {
     await tx.insert(guidanceVersions).values({
       label: starterPolicy.version, content: { version: starterPolicy.version, questions: starterQuestions }, signedBy, effectiveFrom,
     })
-    await tx.insert(policyVersions).values({ label: starterPolicy.version, content: starterPolicy, signedBy, effectiveFrom })
+    await tx.insert(policyVersions).values({ label: starterPolicy.version, content: policySchema.parse(starterPolicy), signedBy, effectiveFrom })
     await tx.insert(installation).values({ key: mark, value: { users: demoUsers.length, practices: demoPractices.length } })
     return true
   })
