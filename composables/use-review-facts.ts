@@ -7,7 +7,7 @@ export interface Fact { label: string, value: string, detail?: string, tone?: 's
 /** How loudly a queue line about the kidneys is written; its words say the same. */
 export function kidneyTone(line: string | null): 'stop' | 'flare' | 'plain' {
   if (line === null) return 'plain'
-  if (/dialysis|acute|injury/i.test(line)) return 'stop'
+  if (/dialysis|acute|injury|not steady/i.test(line)) return 'stop'
   const figure = /eGFR\s*<?\s*(\d+(?:\.\d+)?)/.exec(line)?.[1]
   if (figure !== undefined) return Number(figure) < 30 ? 'stop' : 'plain'
   return /old|no creatinine|could not|missing|unknown/i.test(line) ? 'flare' : 'plain'

@@ -2,9 +2,9 @@ import { and, desc, eq, isNull } from 'drizzle-orm'
 import { alias } from 'drizzle-orm/pg-core'
 import { assess } from '#shared/domain/assessment/assess'
 import { inputsFrom } from '#shared/domain/assessment/inputs'
+import { kidneyLine } from '#shared/domain/assessment/kidney-line'
 import type { Assessment, AssessmentInputs } from '#shared/domain/assessment/types'
 import { findAgent } from '#shared/domain/contrast/agents'
-import { isIntravenous } from '#shared/domain/contrast/outcome'
 import type { RecordReading } from '#shared/domain/record/types'
 import type { RequestForm } from '#shared/domain/request/form'
 import type { GadoliniumExposure } from '#shared/domain/safety/types'
@@ -85,24 +85,5 @@ export async function storeAssessment(tx: Database, ctx: ServiceContext, entry: 
     outcome: entry.result.suggestion ?? 'discuss',
     gateEgfr: entry.result.kidney.gateEgfr,
     kidneyLine: kidneyLine(entry.result),
-  }
-}
-
-/** What a reader scans a list for: the kidney figure, or why there is none. */
-export function kidneyLine(result: Assessment): string {
-  const { kidney, suggestion } = result
-  if (kidney.status === 'dialysis') return 'dialysis'
-  if (suggestion !== null && suggestion !== 'discuss' && !isIntravenous(suggestion)) return 'no lab needed'
-  if (kidney.injury.status === 'aki' || kidney.injury.status === 'aki-presumed') return 'acute kidney injury'
-  if (kidney.currency === 'too-old' && kidney.creatinine) return `lab ${kidney.creatinine.ageDays} days old`
-  if (kidney.egfr) return `eGFR ${kidney.egfr.display}`
-  if (kidney.range) return `eGFR ${kidney.range.low.display} to ${kidney.range.high.display}`
-  switch (kidney.status) {
-    case 'no-creatinine': return kidney.currency === 'not-needed' ? 'no lab needed' : 'no creatinine'
-    case 'could-not-look': return 'record not reachable'
-    case 'needs-height': return 'height needed'
-    case 'needs-sex': return 'sex needed'
-    case 'no-equation': return 'under 1 year'
-    default: return 'kidney function not known'
   }
 }

@@ -1,6 +1,7 @@
 import { and, asc, inArray, sql } from 'drizzle-orm'
 import type { SQL } from 'drizzle-orm'
 import { z } from 'zod'
+import { watchedKidneyLines } from '#shared/domain/assessment/kidney-line'
 import type { reviewQuery } from '#shared/schemas/requests'
 import type { ReviewView } from '#shared/types/views'
 import { requests } from '#server/database/schema/requests'
@@ -41,7 +42,7 @@ function filterFor(filter: z.output<typeof reviewQuery>['filter']): SQL | null {
     case 'reply': return sql`(${requests.replyWaiting} or ${requests.awaiting} = 'imaging')`
     case 'reopened': return sql`${requests.state} = 'reopened'`
     case 'contrast': return inArray(requests.outcome, ['iv-with-and-without', 'iv-with-only', 'iv-hepatobiliary', 'intra-articular', 'discuss'])
-    case 'low-kidney': return sql`(${requests.gateEgfr} < 45 or ${requests.kidneyLine} in ('dialysis', 'acute kidney injury'))`
+    case 'low-kidney': return sql`(${requests.gateEgfr} < 45 or ${inArray(requests.kidneyLine, [...watchedKidneyLines])})`
     case 'all': return null
   }
 }

@@ -38,7 +38,7 @@ describe('what a radiologist scans for', () => {
 })
 
 describe('the kidney line of the queue', () => {
-  it.each([['hemodialysis', 'stop'], ['eGFR 24', 'stop'], ['creatinine 94 days old', 'flare'], ['no creatinine', 'flare'], ['eGFR 69', 'plain'], [null, 'plain']])(
+  it.each([['hemodialysis', 'stop'], ['eGFR 24', 'stop'], ['creatinine not steady', 'stop'], ['creatinine 94 days old', 'flare'], ['no creatinine', 'flare'], ['eGFR 69', 'plain'], [null, 'plain']])(
     '%j is written %s', (line, tone) => {
       expect(kidneyTone(line)).toBe(tone)
     })
