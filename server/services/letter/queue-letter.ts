@@ -45,7 +45,7 @@ export function writeLetter(ctx: Pick<ServiceContext, 'now'>, { loaded, decision
     language: 'en' as const,
     now: ctx.now.toISOString(),
     patient: { fullName: patient.displayName, birthDate: assessment.inputs.patient.birthDate, sex: assessment.inputs.patient.sex },
-    exam: { region: request.region ?? '' },
+    exam: { region: request.region ?? '', name: request.examName },
     assessment: { ...assessment.result, findings: found.findings, kidney: found.kidney },
     needs: found.needs,
     decision: { contrast: decided.contrast, agent: letterAgent(decided.agent) },

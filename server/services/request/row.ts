@@ -1,4 +1,5 @@
 import { eq } from 'drizzle-orm'
+import { examNameFor } from '#shared/domain/contrast/exam-name'
 import { ageWords } from '#shared/domain/record/age-words'
 import { nextStep } from '#shared/domain/request/next-step'
 import type { RequestRow, SlotView } from '#shared/types/views'
@@ -63,7 +64,7 @@ export function rowView(row: SelectedRow, now: Date, zone: string): RequestRow {
     sentence: row.sentence,
     outcome: row.outcome,
     decided: row.decided === 'discuss' ? null : row.decided,
-    examName: row.examName,
+    examName: row.examName === null ? null : examNameFor(row.examName, row.decided ?? row.outcome),
     region: row.region,
     patient: { displayName: row.displayName, ageWords: ageWords(row.birthDate, now.toISOString(), zone), sex: row.sex, recordNumber: row.recordNumber },
     practice: row.practice,

@@ -1,6 +1,7 @@
 import type { Assessment, AssessmentInputs, AssessmentRules } from './types'
 import type { Decided } from './judge'
 import { becauseClauses, plainVersion, providedClauses, sentenceOf } from './clauses'
+import { examNameFor } from '../contrast/exam-name'
 import { judge } from './judge'
 import { engineVersion } from './types'
 import { unlessClauses } from './unless'
@@ -18,7 +19,7 @@ export function assess(inputs: AssessmentInputs, rules: AssessmentRules): Assess
     guidanceVersion: rules.guidance.version,
     policyVersion: rules.policy.version,
     assessedAt: inputs.now,
-    exam: question && { questionId: question.id, region: question.region, name: question.exam, question: question.question },
+    exam: question && { questionId: question.id, region: question.region, name: examNameFor(question.exam, judged.suggestion), question: question.question },
     guidance: judged.guidance,
     suggestion: judged.suggestion,
     sentence: sentenceOf(judged),

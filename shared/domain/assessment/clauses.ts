@@ -2,6 +2,7 @@ import type { Judgement } from './judge'
 import type { Assessment, Clause } from './types'
 import type { SafetyFinding } from '../safety/types'
 import type { Source } from '../source'
+import { examNameFor } from '../contrast/exam-name'
 import { isIntravenous, outcomeWords } from '../contrast/outcome'
 import { isAcute } from '../kidney/injury'
 import { safetySources } from '../safety/sources'
@@ -23,9 +24,10 @@ export function sentenceOf({ question, guidance, suggestion, turnedBy }: Judgeme
     return `${question.exam}, with or without contrast: ${open === 1 ? 'one answer decides' : `${['two', 'three'][open - 2] ?? open} answers decide`}`
   }
   const reason = turnedBy === null ? (guidance.status === 'answered' ? guidance.inShort : 'what decides is not known') : turnedInShort[turnedBy.id] ?? 'a safety finding holds contrast back'
-  // "MRI pituitary, dynamic, without contrast", "MRI pancreas with MRCP, without contrast": such names need a comma after them.
-  const comma = /,| with /.test(question.exam) ? ',' : ''
-  return `${question.exam}${comma} ${outcomeWords[suggestion].phrase}, because ${reason}`
+  const name = examNameFor(question.exam, suggestion)
+  // "MRI pituitary, dynamic, without contrast", "MRI pancreas with MRCP, without contrast": such names need a comma after them, as does an arthrogram.
+  const comma = /,| with |^MR arthrogram/.test(name) ? ',' : ''
+  return `${name}${comma} ${outcomeWords[suggestion].phrase}, because ${reason}`
 }
 
 /** The guidance's reason, each safety finding that turned, barred or holds, then one line on the kidneys. */
@@ -64,8 +66,14 @@ function kidneyClauses({ findings, kidney, wanted }: Judgement): Clause[] {
   if (kidney.gateEgfr !== null) {
     return [{ text: 'Kidney function: no reason found in the data available to hold back a group II agent.', source: safetySources.acrNkf }]
   }
-  const asked = kidney.currency === 'not-needed' ? ' Policy asks for no creatinine without a kidney risk factor.' : ''
+  const reason = isInfant(findings) ? ' No creatinine is asked for at this age.' : ' Policy asks for no creatinine without a kidney risk factor.'
+  const asked = kidney.currency === 'not-needed' ? reason : ''
   return [{ text: `${kidney.headline}.${asked}`, source: safetySources.acrManual }]
+}
+
+/** Under one year no equation estimates GFR: neither a creatinine nor a policy answers for the kidneys. */
+function isInfant(findings: readonly SafetyFinding[]): boolean {
+  return findings.some(found => found.id === 'child-under-one')
 }
 
 /** What must be in place, with its owner; then what is not needed, so that nobody orders it. */
@@ -79,6 +87,8 @@ function notNeeded({ suggestion, kidney, needs, findings }: Judgement): Clause[]
   if (suggestion === 'intra-articular') return [{ text: 'No lab work: kidney function does not decide an injection into a joint', source: safetySources.joints }]
   if (suggestion === null || !isIntravenous(suggestion) || needs.some(need => need.kind === 'creatinine')) return []
   if (kidney.status === 'dialysis') return [{ text: 'No new lab work: on dialysis the creatinine decides nothing', source: safetySources.acrNkf }]
+  // Whether a baby needs a blood test is for the radiologist and the pediatric team.
+  if (isInfant(findings)) return []
   // An unsteady creatinine, or a single one in acute illness, may well be repeated: nobody is told that no lab is needed.
   if (isAcute(kidney.injury) || findings.some(found => found.id === 'kidney-injury-not-judged')) return []
   if (kidney.currency === 'current' && kidney.windowDays !== null) {

@@ -9,7 +9,7 @@ import type { Source } from '../source'
 import type { Need } from './needs'
 
 /** Changes whenever the same inputs could give another result; stored with every assessment. */
-export const engineVersion = '1.0.0'
+export const engineVersion = '1.1.0'
 
 /** How the reading of the hospital record went. The last two are never merged with "none found". */
 export type RecordState = 'complete' | 'incomplete' | 'unreachable' | 'not-read'

@@ -105,7 +105,7 @@ export function evaluateKidney(input: KidneyInput): KidneyFunction {
 
   const window = creatinineWindow({
     policy, screening, setting: input.setting, stat: input.priority === 'stat', injury, gateEgfr,
-    ageYears: agesAtExam?.oldest.completedYears ?? null,
+    ageYears: agesAtExam?.oldest.completedYears ?? null, underOne: agesAtExam !== null && agesAtExam.youngest.completedYears < 1,
   })
   const shown = {
     status: onDialysis ? 'dialysis' : outcome?.status ?? statusWithoutCreatinine(input.record.state),

@@ -17,6 +17,8 @@ export interface WindowInput {
   gateEgfr: number | null
   /** Completed years, the older end where the birth date is partial; null where unknown. */
   ageYears: number | null
+  /** Whether the patient may be under one year old at the exam, where no equation estimates GFR. */
+  underOne: boolean
 }
 
 /** The longest accepted age in days, null where none is set, and why, in words. */
@@ -38,7 +40,6 @@ function riskReason({ screening, policy, ageYears }: WindowInput): string | null
   if (screening.liverDisease === 'yes') return 'Liver disease'
   if (ageYears === null) return 'Age not known'
   if (ageYears > policy.ageRiskAboveYears.value) return `Age over ${policy.ageRiskAboveYears.value}`
-  if (ageYears < 1) return 'Under 1 year of age'
   const answers = [screening.kidneyDisease, screening.kidneyRiskFactor, screening.liverDisease, screening.dialysis, screening.acuteIllness]
   if (answers.includes('unknown')) return 'A kidney risk not ruled out'
   return answers.includes(null) ? 'Kidney questions not all answered' : null
@@ -57,6 +58,7 @@ export function creatinineWindow(input: WindowInput): CreatinineWindow {
   if (input.screening.dialysis === 'hemodialysis' || input.screening.dialysis === 'peritoneal') {
     return { days: null, reason: 'On dialysis: already in the group with the highest risk, no creatinine is needed' }
   }
+  if (input.underOne) return { days: null, reason: 'Under 1 year of age: no equation uses a creatinine; a radiologist decides with the pediatric team' }
   const acute = acuteReason(input)
   if (acute !== null) return inDays(acute, days.acute)
   if (input.gateEgfr !== null && input.gateEgfr < 30) return inDays('Last eGFR below 30', days.egfrBelow30)

@@ -11,7 +11,7 @@ import { usesContrast } from '../contrast/outcome'
 import { ageBounds } from '../safety/age'
 import { pregnancyAsked } from '../safety/pregnancy'
 import {
-  aboutContrastSections, afterSection, appointmentSection, beforeSection, bringSection, callSection, caution, tellUsSection, warningSection, whyParagraphs,
+  aboutContrastSections, afterSection, appointmentSection, beforeSection, bringSection, callSection, caution, isPregnant, tellUsSection, warningSection, whyParagraphs,
 } from './parts'
 import { plainScanName } from './scan-name'
 
@@ -33,7 +33,8 @@ interface Common {
   /** ISO instant the letter is written. */
   now: string
   patient: Pick<AssessedPatient, 'birthDate' | 'sex'> & { fullName: string }
-  exam: { region: string }
+  /** `name` is the exam's clinical name, null where none is stored. */
+  exam: { region: string, name: string | null }
   assessment: LetterAssessment
   /** Needs for the decision, as `assessDecision` gives them. */
   needs: readonly Need[]
@@ -60,7 +61,7 @@ export function composeLetter(input: LetterInput): Letter {
   if (input.kind === 'before') return frame(input, 'before', input.decision.contrast, planTitle(input), planOf(input, input.slot))
   if (input.kind === 'after') return afterLetter(input, input.given)
   if (input.change === 'called-off') return calledOff(input)
-  const scan = plainScanName(input.exam.region)
+  const scan = plainScanName(input.exam)
   const title = input.change === 'moved' ? `Your ${scan} has a new time` : `The plan for your ${scan} has changed`
   const plan = planOf(input, input.slot)
   return frame(input, 'changed', input.decision.contrast, title, {
@@ -93,7 +94,7 @@ function addressee(input: Common): string {
 }
 
 function planTitle({ exam, decision, assessment }: Common): string {
-  const scan = plainScanName(exam.region)
+  const scan = plainScanName(exam)
   switch (decision.contrast) {
     // Where guidance asks for contrast and something holds it back, the scan would need it.
     case 'none': return assessment.guidance?.status === 'answered' && assessment.guidance.contrast === 'none'
@@ -114,14 +115,14 @@ function planOf(input: Common, slot: LetterSlot): Pick<Letter, 'opening' | 'sect
       beforeSection(contrast, input.assessment, input.needs, input.policy),
       bringSection(input.needs),
       ...aboutContrastSections(contrast, agent?.macrocyclic ?? false, input.assessment, input.policy),
-      tellUsSection(contrast, pregnancyAsked(input.patient, input.policy, input.now)),
+      tellUsSection(contrast, pregnancyAsked(input.patient, input.policy, input.now) && !isPregnant(input.assessment)),
       callSection(input.policy),
     ],
   }
 }
 
 function afterLetter(input: Common, given: LetterGiven): Letter {
-  const scan = plainScanName(input.exam.region)
+  const scan = plainScanName(input.exam)
   const used = usesContrast(given.contrast)
   const breastfeeding = input.assessment.findings.filter(found => found.topic === 'breastfeeding').map(found => found.plain)
   return frame(input, 'after', given.contrast, used ? `Contrast was used in your ${scan}, and here is why` : `No contrast was used in your ${scan}`, {
@@ -149,7 +150,7 @@ function usedSection(given: LetterGiven, used: boolean): LetterSection {
 }
 
 function calledOff(input: Common): Letter {
-  return frame(input, 'changed', null, `Your ${plainScanName(input.exam.region)} will not take place as planned`, {
+  return frame(input, 'changed', null, `Your ${plainScanName(input.exam)} will not take place as planned`, {
     opening: ['Please do not come at the time we gave you.'],
     sections: [
       {

@@ -36,9 +36,19 @@ function timeWords(at: string, policy: Policy): string {
  */
 export function whyParagraphs(assessment: LetterAssessment, contrast: DecidableOutcome): string[] {
   if (assessment.suggestion === contrast && assessment.plain.why !== '') return [assessment.plain.why]
-  return [contrast === 'none'
-    ? 'A doctor looked at your case. They chose to do the scan without contrast.'
-    : 'A doctor looked at your case. They chose to do the scan with contrast.']
+  if (contrast === 'none') return ['A doctor looked at your case. They chose to do the scan without contrast.']
+  const chosen = 'A doctor looked at your case. They chose to do the scan with contrast.'
+  return isPregnant(assessment) ? [chosen, 'You are pregnant. Your doctors agreed that contrast is needed.'] : [chosen]
+}
+
+/** Whether the patient is known to be pregnant and contrast was judged all the same. */
+export function isPregnant({ findings }: Pick<LetterAssessment, 'findings'>): boolean {
+  return findings.some(found => found.id === 'pregnancy-yes')
+}
+
+/** Whether the kidneys are weak, or have to be taken as weak while it is not known if the patient has dialysis. */
+function kidneysWeak({ kidney, findings }: LetterAssessment, policy: Policy): boolean {
+  return kidneyHeld(kidney, policy) || findings.some(found => found.id === 'dialysis-unknown')
 }
 
 /** What to do before: what the needs ask, the blood test at hand, and food. */
@@ -56,16 +66,19 @@ export function beforeSection(contrast: DecidableOutcome, assessment: LetterAsse
   return section('before', 'Before your scan', paragraphs, items)
 }
 
-function bloodTest({ kidney, findings }: LetterAssessment, needs: readonly Need[], policy: Policy): string[] {
+function bloodTest(assessment: LetterAssessment, needs: readonly Need[], policy: Policy): string[] {
+  const { kidney, findings } = assessment
   if (needs.some(need => need.kind === 'creatinine') || kidney.status === 'dialysis') return []
   if (kidney.currency === 'current' && kidney.creatinine !== null && kidney.gateEgfr !== null) {
     const day = DateTime.fromISO(kidney.creatinine.collectedAt, { zone: policy.department.timeZone }).setLocale('en-US').toFormat('LLLL d')
-    const asked = kidneyHeld(kidney, policy) || findings.some(found => found.topic === 'kidney' && found.asksRadiologist)
+    const asked = kidneysWeak(assessment, policy) || findings.some(found => found.topic === 'kidney' && found.asksRadiologist)
     return [asked
       ? `A doctor looked at your blood test from ${day}. They agreed that you can have contrast.`
       : `Your blood test from ${day} gives no reason to leave contrast out.`]
   }
-  return kidney.currency === 'not-needed' ? ['You do not need a blood test for this scan.'] : []
+  // Whether a baby needs a blood test is for the radiologist and the pediatric team.
+  const infant = findings.some(found => found.id === 'child-under-one')
+  return kidney.currency === 'not-needed' && !infant ? ['You do not need a blood test for this scan.'] : []
 }
 
 /** When and where. */
@@ -105,7 +118,7 @@ export function aboutContrastSections(contrast: DecidableOutcome, macrocyclic: b
     'Most people feel nothing. A few feel warm or get an itch for a short time. Strong reactions are rare, and we are ready to treat them.',
     `${macrocyclic ? 'The type we use holds its metal, gadolinium, most tightly.' : 'Contrast holds a metal called gadolinium.'} `
     + 'A trace can stay in the body. With healthy kidneys, no harm from this has been proven.',
-    ...(kidneyHeld(assessment.kidney, policy)
+    ...(kidneysWeak(assessment, policy)
       ? ['With very weak kidneys, a rare skin illness has been seen, nearly always with older types of contrast. Your doctors thought about this.']
       : []),
     ...breastfeeding,
@@ -113,10 +126,10 @@ export function aboutContrastSections(contrast: DecidableOutcome, macrocyclic: b
 }
 
 /** What the patient should tell before coming. */
-export function tellUsSection(contrast: DecidableOutcome, pregnancyAsked: boolean): LetterSection {
+export function tellUsSection(contrast: DecidableOutcome, pregnancyOpen: boolean): LetterSection {
   return section('tell-us', 'Tell us before you come if', [], [
     ...(contrast === 'none' ? [] : ['You have ever had a reaction to contrast.']),
-    ...(pregnancyAsked ? ['You may be pregnant.'] : []),
+    ...(pregnancyOpen ? ['You may be pregnant.'] : []),
     ...(isIntravenous(contrast) ? ['Your kidneys have become worse, or you have been very ill.'] : []),
     ...(contrast === 'intra-articular' ? ['The skin over the joint is red or sore, or you have a fever.', 'You take a blood thinner.'] : []),
     'You have an implant or metal in your body that we do not know of.',
@@ -130,9 +143,9 @@ export function callSection(policy: Policy): LetterSection {
 }
 
 /** How contrast given by vein leaves the body; with weak kidneys it is not gone within a day. */
-function leavesBody(contrast: DecidableOutcome, { kidney }: LetterAssessment, policy: Policy): string {
-  if (kidney.status === 'dialysis') return 'Your dialysis helps to clear the contrast. Keep your dialysis plan. You can eat and drink as you did before.'
-  const slow = kidneyHeld(kidney, policy)
+function leavesBody(contrast: DecidableOutcome, assessment: LetterAssessment, policy: Policy): string {
+  if (assessment.kidney.status === 'dialysis') return 'Your dialysis helps to clear the contrast. Keep your dialysis plan. You can eat and drink as you did before.'
+  const slow = kidneysWeak(assessment, policy)
   if (contrast === 'iv-hepatobiliary') return `The contrast leaves your body through the liver and the kidneys${slow ? '. When kidneys work less well, this takes a few days.' : ', most of it within a day.'}`
   return slow
     ? 'The contrast leaves your body in the urine. When kidneys work less well, this takes a few days. You can eat and drink as you did before.'

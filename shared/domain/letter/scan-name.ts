@@ -37,7 +37,25 @@ const plainRegions: Record<string, string> = {
   'pediatric abdomen': 'belly scan',
 }
 
-/** The exam in plain words, for instance "brain scan"; "MRI scan" where the department named a region of its own. */
-export function plainScanName(region: string): string {
-  return plainRegions[region] ?? 'MRI scan'
+/**
+ * Exams that reach past, or lie beside, the region their question is filed under: a patient with an infection of the spine
+ * comes for the whole spine, not for the "lower back". The first that fits counts.
+ */
+const plainExams: readonly [exam: RegExp, name: string][] = [
+  [/^MRI (?:whole spine|spine|of the affected spine level|cervical and thoracic cord)(?:,|$)/, 'spine scan'],
+  [/^MRI brain and (?:cervical )?spine\b/, 'brain and spine scan'],
+  [/^(?:Rapid )?MRI brain\b/, 'brain scan'],
+  [/^MRI abdomen\b/, 'belly scan'],
+  [/^MRI pelvis(?:,|$)/, 'pelvis scan'],
+  [/^MRI temporomandibular joints?\b/, 'jaw scan'],
+  [/^MRI of the /, 'MRI scan'],
+]
+
+/**
+ * The exam in plain words, for instance "brain scan": by its name where that disagrees with the region of the question, else
+ * by the region; "MRI scan" where the department named a region of its own.
+ */
+export function plainScanName({ region, name }: { region: string, name: string | null }): string {
+  const byExam = name === null ? undefined : plainExams.find(([exam]) => exam.test(name))?.[1]
+  return byExam ?? plainRegions[region] ?? 'MRI scan'
 }

@@ -24,6 +24,16 @@ describe('an assessment', () => {
     expect(texts(rising.provided)).not.toMatch(/No new lab work/)
   })
 
+  it('asks for no creatinine under one year of age, where no equation uses one, and leaves contrast to the radiologist and the pediatric team', () => {
+    const baby = assess({
+      ...marta, readings: [], patient: { ...marta.patient, birthDate: '2026-06-01', weightKg: 7, heightCm: 65 }, screening: { ...quietScreening, kidneyDisease: 'yes' },
+    }, rules)
+    expect(baby.needs.map(need => need.kind)).not.toContain('creatinine')
+    expect(baby.needs.map(need => need.kind)).toContain('radiologist-word')
+    expect(texts(baby.because)).toMatch(/A radiologist decides with the pediatric team/)
+    expect(texts([...baby.because, ...baby.provided])).not.toMatch(/6 weeks|policy asks for no creatinine|No lab work/i)
+  })
+
   it('names the source of its main reason', () => {
     expect(assess(marta, rules).because[0]?.source?.body).toBe('American College of Radiology')
   })

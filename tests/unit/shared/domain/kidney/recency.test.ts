@@ -20,7 +20,7 @@ const set = (days: number | null) => ({ ...starterPolicy, creatinineWindowDays: 
 
 function windowOf({ screening, ...rest }: Partial<Omit<WindowInput, 'screening'>> & { screening?: Partial<KidneyScreening> } = {}) {
   return creatinineWindow({
-    policy: set(null), screening: { ...quiet, ...screening }, setting: 'outpatient', stat: false, injury: stable, gateEgfr: 90, ageYears: 50, ...rest,
+    policy: set(null), screening: { ...quiet, ...screening }, setting: 'outpatient', stat: false, injury: stable, gateEgfr: 90, ageYears: 50, underOne: false, ...rest,
   })
 }
 
@@ -35,7 +35,8 @@ describe('the longest accepted age of a creatinine', () => {
     ['questions not answered yet', 42, { screening: { liverDisease: null } }],
     ['over the age that counts as a risk', 42, { ageYears: 61 }],
     ['just at that age', null, { ageYears: 60 }],
-    ['an infant', 42, { ageYears: 0, gateEgfr: null }],
+    ['an infant', null, { ageYears: 0, underOne: true, gateEgfr: null, screening: { kidneyDisease: 'yes' } }],
+    ['an infant in hospital', null, { ageYears: 0, underOne: true, gateEgfr: null, setting: 'inpatient' }],
     ['a child of one year', null, { ageYears: 1 }],
     ['an age that cannot be read', 42, { ageYears: null }],
     ['eGFR 59.9', 14, { gateEgfr: 59.9 }],
@@ -54,6 +55,7 @@ describe('the longest accepted age of a creatinine', () => {
 
   it('comes with its reason in words', () => {
     expect(windowOf({ ageYears: 70 }).reason).toBe('Age over 60: creatinine at most 42 days old at the exam')
+    expect(windowOf({ ageYears: 0, underOne: true }).reason).toMatch(/^Under 1 year of age: no equation uses a creatinine; .*pediatric team$/)
     expect(windowOf().reason).toBe('No kidney risk factor: policy asks for no creatinine')
   })
 })

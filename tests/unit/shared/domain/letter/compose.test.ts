@@ -68,6 +68,27 @@ describe('the letter before the scan', () => {
     expect(bodyOf(inpatient)).toContain('They agreed that you can have contrast.')
   })
 
+  it('tells a pregnant patient that contrast was agreed on, and does not ask whether she may be pregnant', () => {
+    const patient = { birthDate: '1992-05-20', sex: 'female' as const, weightKg: 60, weightAt: null, heightCm: null, heightAt: null }
+    const pregnant = composeLetter({ kind: 'before', slot, ...common('iv-with-and-without', { patient, screening: { ...quietScreening, pregnancy: 'yes' } }) })
+    expect(pregnant.opening).toContain('You are pregnant. Your doctors agreed that contrast is needed.')
+    expect(bodyOf(pregnant)).not.toContain('You may be pregnant.')
+    const possible = composeLetter({ kind: 'before', slot, ...common('iv-with-and-without', { patient, screening: { ...quietScreening, pregnancy: 'possible' } }) })
+    expect(bodyOf(possible)).toContain('You may be pregnant.')
+    expect(bodyOf(possible)).not.toContain('You are pregnant.')
+  })
+
+  it('neither asks for nor rules out a blood test under one year of age', () => {
+    const baby = { birthDate: '2026-06-01', sex: 'male' as const, weightKg: 7, weightAt: null, heightCm: 65, heightAt: null }
+    expect(bodyOf(composeLetter({ kind: 'before', slot, ...common('iv-with-and-without', { patient: baby, readings: [] }) }))).not.toMatch(/blood test/)
+  })
+
+  it('tells a patient whose dialysis is not known no less than one with weak kidneys', () => {
+    const open = composeLetter({ kind: 'before', slot, ...common('iv-with-and-without', { screening: { ...quietScreening, dialysis: 'unknown' } }) })
+    expect(bodyOf(open)).toContain('With very weak kidneys, a rare skin illness has been seen')
+    expect(bodyOf(open)).not.toContain('gives no reason to leave contrast out')
+  })
+
   it('goes to a parent or guardian for a child', () => {
     const child = composeLetter({ kind: 'before', slot, ...common('none', { patient: { birthDate: '2018-05-20', sex: 'male', weightKg: 25, weightAt: null, heightCm: 130, heightAt: null } }) })
     expect(child.to).toBe('the parent or guardian of Marta Lindqvist')
@@ -97,6 +118,9 @@ describe('the letter after the scan', () => {
     const after = (inputs: Parameters<typeof common>[1]) => bodyOf(composeLetter({ kind: 'after', given: usual, ...common('iv-with-and-without', inputs) }))
     expect(after({})).toMatch(/in the urine within a day/)
     expect(after({ readings: [creatinine(2.4, '2026-11-30T14:00:00Z')] })).toMatch(/this takes a few days/)
+    const open = after({ screening: { ...quietScreening, dialysis: 'unknown' } })
+    expect(open).toMatch(/this takes a few days/)
+    expect(open).not.toMatch(/within a day/)
     const dialysis = after({ screening: { ...quietScreening, dialysis: 'hemodialysis' } })
     expect(dialysis).toMatch(/Your dialysis helps to clear the contrast/)
     expect(dialysis).not.toMatch(/urine|within a day/)

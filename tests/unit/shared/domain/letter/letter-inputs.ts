@@ -12,13 +12,13 @@ export const slot = { startsAt: '2026-12-02T16:20:00Z', place: 'Scanner 2, groun
 type Part = Pick<LetterInput, 'language' | 'now' | 'patient' | 'exam' | 'assessment' | 'needs' | 'decision' | 'policy'>
 
 /** The parts common to every letter, for a decision on the example request or a variant of it. */
-export function common(contrast: DecidableOutcome, inputs: Partial<AssessmentInputs> = {}, region = 'brain'): Part {
+export function common(contrast: DecidableOutcome, inputs: Partial<AssessmentInputs> = {}, region = 'brain', name: string | null = null): Part {
   const all = { ...marta, ...inputs }
   const agent = contrast === 'none' ? null : gadobutrol
   const decided = assessDecision(all, rules, { contrast, agent: agent && 'gadobutrol' })
   return {
     language: 'en', now: all.now, patient: { fullName: 'Marta Lindqvist', birthDate: all.patient.birthDate, sex: all.patient.sex },
-    exam: { region }, assessment: { ...assess(all, rules), findings: decided.findings, kidney: decided.kidney }, needs: decided.needs,
+    exam: { region, name }, assessment: { ...assess(all, rules), findings: decided.findings, kidney: decided.kidney }, needs: decided.needs,
     decision: { contrast, agent }, policy: starterPolicy,
   }
 }

@@ -20,6 +20,12 @@ const situations: Record<string, Partial<AssessmentInputs>> = {
   'nothing found': {},
   'no blood test': { readings: [] },
   'dialysis': { screening: { ...quietScreening, dialysis: 'hemodialysis' } },
+  'dialysis not known': { screening: { ...quietScreening, dialysis: 'unknown' } },
+  'dialysis and a stat exam': { priority: 'stat', screening: { ...quietScreening, dialysis: 'hemodialysis' } },
+  'pregnancy': {
+    patient: { birthDate: '1992-05-20', sex: 'female', weightKg: 66, weightAt: null, heightCm: null, heightAt: null },
+    screening: { ...quietScreening, pregnancy: 'yes' },
+  },
   'a reaction, asthma and an implant': { screening: { ...quietScreening, earlierReaction: 'yes', reactionSeverity: 'moderate', asthma: 'yes', implants: 'yes' } },
   'breastfeeding and an open pregnancy question': {
     patient: { birthDate: '1992-05-20', sex: 'female', weightKg: null, weightAt: null, heightCm: null, heightAt: null },
@@ -63,7 +69,7 @@ describe('letters in plain words', () => {
   it.each(starterQuestions.flatMap(question => question.branches.map((branch, index) => ({ id: question.id, index, question, branch }))))(
     'read at grade 8 or below with the words of $id, branch $index', ({ question, branch }) => {
       if (branch.contrast === 'discuss') return
-      const part = common(branch.contrast, {}, question.region)
+      const part = common(branch.contrast, {}, question.region, question.exam)
       const assessment = { ...part.assessment, suggestion: branch.contrast, plain: { why: branch.plain, before: [] } }
       const letter = composeLetter({ kind: 'before', slot, ...part, assessment })
       expect(letter.opening).toEqual([branch.plain])
