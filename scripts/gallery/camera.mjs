@@ -50,7 +50,9 @@ export async function createCamera({ chromium, place, out }) {
       else await open(page, address, state.bare)
       await state.then?.(page, cast, width)
       await page.waitForLoadState('networkidle')
-      await page.screenshot({ path: join(out, fileName(state.name, width)), fullPage: true, animations: 'disabled' })
+      // A dialog belongs to the screen, not to the length of the page.
+      const fullPage = await page.getByRole('dialog').count() === 0
+      await page.screenshot({ path: join(out, fileName(state.name, width)), fullPage, animations: 'disabled' })
     } finally {
       await page.close()
       if (!state.as) await context.close()
