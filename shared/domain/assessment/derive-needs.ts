@@ -90,10 +90,10 @@ function describe(kind: NeedKind, context: NeedsContext): Need {
     case 'height': return { ...base, text: 'A height, in cm, for the child\'s eGFR', owner: 'ordering', dueAt: before(lead), dueText: 'before eGFR is read' }
     case 'premedication': {
       const accelerated = inputs.setting !== 'outpatient' || inputs.priority === 'stat'
-      const hours = accelerated ? premedication.accelerated : premedication.oral
+      const { hours, note } = premedicationCourse(inputs, premedication, accelerated)
       return {
-        ...base, text: `Premedication prescribed, first dose ${hours} hours before`, owner: 'ordering', dueAt: before(hours),
-        dueText: `first dose ${hours} hours before the exam`, source: policy.premedicationLeadHours.source,
+        ...base, text: `Premedication prescribed${note}`, owner: 'ordering', dueAt: before(hours ?? 0),
+        dueText: hours === null ? 'before contrast' : `first dose ${hours} hours before the exam`, source: policy.premedicationLeadHours.source,
       }
     }
     case 'dialysis-after': return {
@@ -134,6 +134,20 @@ function describe(kind: NeedKind, context: NeedsContext): Need {
       source: policy.observationMinutes.source,
     }
   }
+}
+
+/** The course that still fits before the exam, with what to say where the usual one does not; `hours` is null where none fits. */
+function premedicationCourse(
+  { now, plannedAt }: AssessmentInputs, lead: Policy['premedicationLeadHours']['value'], accelerated: boolean,
+): { hours: number | null, note: string } {
+  const left = plannedAt === null ? Number.POSITIVE_INFINITY : DateTime.fromISO(plannedAt).diff(DateTime.fromISO(now), 'hours').hours
+  const usual = accelerated ? lead.accelerated : lead.oral
+  if (left >= usual) return { hours: usual, note: accelerated ? ', accelerated course' : ', oral course' }
+  // A course already under way stays right: this judges only what could begin now.
+  if (accelerated || left < lead.accelerated) {
+    return { hours: null, note: `: no course that begins now is done in time (${lead.accelerated} hours at least), so a radiologist's word is needed` }
+  }
+  return { hours: lead.accelerated, note: `: the oral course (${lead.oral} hours) no longer fits if it has not begun, so the accelerated one (${lead.accelerated} hours) or a radiologist's word is needed` }
 }
 
 function shifted(at: string | null, hours: number): string | null {

@@ -81,11 +81,11 @@ export function judge(inputs: AssessmentInputs, rules: AssessmentRules, options:
   const ranked = suggestion === 'discuss' ? wanted : suggestion
   const agents = ranked !== null && usesContrast(ranked)
     ? rankAgents({
-        outcome: ranked, policy, agents: rules.agents, barred: barredAgents(found),
+        outcome: ranked, policy, agents: rules.agents, barred: barredAgents(found, inputs.screening),
         patient: { ageYears: age?.youngest ?? null, weightKg: inputs.patient.weightKg },
       })
     : null
-  const findings = agents !== null && agents.best === null && !found.some(item => item.id === 'condition-nsf') ? [noAgentFits(policy), ...found] : found
+  const findings = agents !== null && agents.best === null && !found.some(item => item.id === 'condition-nsf') ? [noAgentFits(policy, ranked), ...found] : found
   return {
     question, guidance, wanted, suggestion, turnedBy, kidney, findings, agents,
     needs: deriveNeeds({
@@ -104,10 +104,11 @@ function askedFor(guidance: GuidanceResult, { answers }: AssessmentInputs): Cont
 }
 
 /** Contrast is asked for and no stocked agent can give it: somebody has to choose otherwise. */
-function noAgentFits(policy: Policy): SafetyFinding {
+function noAgentFits(policy: Policy, outcome: ContrastOutcome | null): SafetyFinding {
   return finding({
     id: 'condition-no-agent-fits', topic: 'condition', severity: 'hold',
-    text: 'No stocked agent fits this exam and this patient: a radiologist chooses another way.',
+    text: 'No stocked agent fits this exam and this patient: a radiologist chooses another way.'
+      + (outcome === 'iv-hepatobiliary' ? ' A protocol without a liver agent may answer the question.' : ''),
     plain: 'None of our types of contrast fits you. A doctor decides what to do.',
     addsNeeds: ['radiologist-word'], asksRadiologist: true, source: policy.stockedAgents.source,
   })
@@ -137,8 +138,10 @@ const barReasons: Record<string, string> = {
   'history-not-obtainable': 'Group I: not without a history',
 }
 
-function barredAgents(findings: SafetyFinding[]): { agent: AgentId, reason: string }[] {
-  return findings.flatMap(found => found.barsAgents.map(agent => ({
-    agent, reason: barReasons[found.id] ?? (found.topic === 'reaction' ? 'An earlier reaction to it' : found.text),
-  })))
+function barredAgents(findings: SafetyFinding[], { liverDisease }: AssessmentInputs['screening']): { agent: AgentId, reason: string }[] {
+  const reasonOf = ({ id, topic, text }: SafetyFinding) => {
+    if (liverDisease === 'unknown' && (id === 'condition-liver' || id === 'condition-liver-acute')) return 'Group I: whether there is severe liver disease is not known'
+    return barReasons[id] ?? (topic === 'reaction' ? 'An earlier reaction to it' : text)
+  }
+  return findings.flatMap(found => found.barsAgents.map(agent => ({ agent, reason: reasonOf(found) })))
 }

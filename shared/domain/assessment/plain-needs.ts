@@ -14,7 +14,8 @@ export function plainNeed(kind: NeedKind, context: { findings: SafetyFinding[], 
     case 'weight': return 'We will ask how much you weigh, or weigh you when you come.'
     case 'height': return 'We will ask how tall you are.'
     case 'premedication': return 'Take the medicine your clinic gives you to lower the chance of a reaction. You may need a ride home.'
-    case 'dialysis-after': return 'Keep your dialysis plan. We book the scan shortly before a session.'
+    // The finding says it once, by how urgent the scan is; it also stands for the radiologist's word.
+    case 'dialysis-after': return context.findings.find(found => found.addsNeeds.includes(kind))?.plain ?? 'Keep your dialysis plan.'
     // An open pregnancy question is put to the patient by its own need.
     case 'radiologist-word': return context.findings.find(found => found.addsNeeds.includes(kind) && !found.addsNeeds.includes('pregnancy-answer'))?.plain ?? null
     case 'reaction-history': return 'Tell us what happened if you ever had a reaction to contrast, and to which kind.'

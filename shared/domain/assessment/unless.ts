@@ -71,7 +71,8 @@ function preparationEffect(base: Judgement, other: Judgement, flips: string): st
   const dropped = [...had].filter(kind => !has.has(kind) && kind !== 'radiologist-word').map(kind => needWords[kind])
   const best = other.agents?.ranked.find(entry => entry.agent === other.agents?.best)
   const words: string[] = []
-  if (other.asksRadiologist !== base.asksRadiologist) {
+  // Where contrast is left out either way, none waits for a word.
+  if (base.suggestion !== 'none' && other.asksRadiologist !== base.asksRadiologist) {
     words.push(other.asksRadiologist ? 'contrast waits for a radiologist\'s word' : 'contrast no longer waits for a radiologist\'s word')
   }
   if (added.length > 0) words.push(`${listed(added)} ${added.length === 1 ? 'is' : 'are'} needed`)

@@ -58,7 +58,7 @@ export interface RankedAgent {
   eligible: boolean
   /** Why it stands here, or each reason it is left out. */
   reasons: string[]
-  /** Null without a weight, or for a joint. */
+  /** Also of an agent left out, since a radiologist may choose one with a reason; lists show it for the others only. Null without a weight, or for a joint. */
   dose: Dose | null
 }
 

@@ -126,7 +126,7 @@ export function evaluateKidney(input: KidneyInput): KidneyFunction {
     windowDays: window.days,
     windowReason: window.reason,
     cautions: kidneyCautions({
-      screening, setting: input.setting, recordState: input.record.state, choice, injury, egfr, beside,
+      screening, setting: input.setting, recordState: input.record.state, choice, injury, egfr, range, beside,
       birthDateExact: agesAtSample?.exact ?? true,
       childHeight: egfr?.equation === 'ckid-u25-cr' || range?.low.equation === 'ckid-u25-cr' ? height : null,
     }),

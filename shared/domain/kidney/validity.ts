@@ -22,6 +22,8 @@ export interface ValidityInput {
   choice: CreatinineChoice
   injury: InjuryAssessment
   egfr: GfrEstimate | null
+  /** Where sex is not known. */
+  range: { low: GfrEstimate, high: GfrEstimate } | null
   beside: GfrEstimate | null
   /** False where the birth date is known only to the month or year. */
   birthDateExact: boolean
@@ -32,12 +34,15 @@ export interface ValidityInput {
 /** Input limits of the CKiD U25 reference code. */
 const u25Inputs = { heightCm: { low: 60, high: 200 }, mgPerDl: { low: 0.1, high: 10 } } as const
 
+/** A limit up to here, mg/dL, is the lower end of a measuring range and not a cut-off for show (project convention). */
+const belowRangeMgPerDl = 0.5
+
 /** A reading that a person would want to know of although it could not be used. */
 function isTelling(reading: LabReading): boolean {
   return reading.analyte === 'creatinine' && reading.status !== 'cancelled' && reading.status !== 'entered-in-error'
 }
 
-function patientCautions({ screening, setting, injury }: ValidityInput): KidneyCaution[] {
+function patientCautions({ screening, setting, injury, choice }: ValidityInput): KidneyCaution[] {
   const cautions: KidneyCaution[] = []
   const { kdigoAki, equationLimits } = kidneySources
   if (isAcute(injury)) {
@@ -46,14 +51,16 @@ function patientCautions({ screening, setting, injury }: ValidityInput): KidneyC
   else if (injury.status === 'insufficient' && (setting !== 'outpatient' || screening.acuteIllness === 'yes')) {
     cautions.push({ id: 'injury-not-judged', text: `${injury.text}. A clinician must judge it`, source: kdigoAki })
   }
-  if (screening.acuteIllness === 'yes' || screening.acuteIllness === 'unknown') {
+  // On dialysis no number is given that an illness or a pregnancy could mislead.
+  const onDialysis = screening.dialysis === 'hemodialysis' || screening.dialysis === 'peritoneal'
+  if (!onDialysis && (screening.acuteIllness === 'yes' || screening.acuteIllness === 'unknown')) {
     const known = screening.acuteIllness === 'yes' ? 'Acute illness, dehydration or surgery in the last 7 days' : 'Acute illness in the last 7 days is not ruled out'
     cautions.push({ id: 'acute-illness', text: `${known}: kidney function may be changing`, source: kdigoAki })
   }
   if (screening.dialysis === 'unknown') {
     cautions.push({ id: 'dialysis-unknown', text: 'Whether the patient is on dialysis is not known; on dialysis an eGFR means nothing', source: equationLimits })
   }
-  if (screening.pregnancy === 'yes' || screening.pregnancy === 'possible') {
+  if (!onDialysis && choice.series.length > 0 && (screening.pregnancy === 'yes' || screening.pregnancy === 'possible')) {
     cautions.push({ id: 'pregnancy', text: 'In pregnancy creatinine is lower than usual and no equation holds', source: equationLimits })
   }
   if (screening.liverDisease === 'yes') {
@@ -87,14 +94,22 @@ function readingCautions({ choice, recordState }: ValidityInput): KidneyCaution[
   return cautions
 }
 
-function equationCautions({ choice, egfr, beside, birthDateExact, childHeight }: ValidityInput): KidneyCaution[] {
+function equationCautions({ choice, egfr, range, beside, birthDateExact, childHeight }: ValidityInput): KidneyCaution[] {
   const cautions: KidneyCaution[] = []
-  const { reading, ckidU25, ckdEpi2021 } = kidneySources
+  const { reading, ckidU25, ckdEpi2021, equationLimits } = kidneySources
   const newest = choice.series.at(-1)
   if (newest === undefined) return cautions
   if (newest.comparator !== null) {
     const side = newest.comparator.startsWith('<') ? 'below a limit: the eGFR is at least the value shown' : 'above a limit: the eGFR is at most the value shown'
     cautions.push({ id: 'bound', text: `The laboratory reports creatinine only as ${side}`, source: reading })
+  }
+  const muscle = egfr ?? range?.low ?? null
+  const withCystatin = [egfr, beside].some(one => one?.equation === 'ckd-epi-2021-cr-cys')
+  if (newest.comparator?.startsWith('<') && newest.mgPerDl <= belowRangeMgPerDl && muscle?.equation === 'ckd-epi-2021-cr' && !withCystatin) {
+    cautions.push({
+      id: 'low-muscle-mass', source: equationLimits,
+      text: 'In an adult, a creatinine too low to measure suggests little muscle, and then the eGFR is too high: a cystatin C tells more',
+    })
   }
   if (!birthDateExact) {
     cautions.push({ id: 'birth-date-partial', text: 'The day of birth is not known; the age with the lower eGFR is used', source: reading })

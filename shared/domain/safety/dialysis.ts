@@ -35,7 +35,8 @@ function hemodialysis(context: SafetyContext): SafetyFinding {
     id: 'dialysis-hemodialysis', topic: 'dialysis', severity: 'hold',
     text: 'Hemodialysis: eGFR means nothing here. A group II agent may be given on a radiologist\'s word, shortly before the next regular session. '
       + 'No extra session is needed on account of the contrast.',
-    plain: 'You have dialysis. A doctor decides about contrast first, and we plan the scan before your next session.',
+    plain: 'You have dialysis, so a doctor looks at contrast first. Keep your dialysis plan. '
+      + (cannotWait(context) ? 'Your scan is urgent and does not wait for a session.' : 'We book the scan shortly before a session.'),
     addsNeeds: ['radiologist-word', 'dialysis-after'], barsAgents: groupOneAgents(context), asksRadiologist: true,
     source: safetySources.acrNkf,
   })

@@ -34,6 +34,13 @@ function dayOf({ givenAt }: GadoliniumExposure, zone: string): string {
   return givenAt.includes('T') && at.isValid ? at.toFormat('yyyy-MM-dd') : givenAt
 }
 
+/** "Oct 23, 2022" of a day, "Oct 2022" of a month; a year, or what is no date, as it is. */
+function dayWords(day: string): string {
+  const format = day.length === 10 ? 'LLL d, yyyy' : day.length === 7 ? 'LLL yyyy' : null
+  const at = DateTime.fromISO(day, { zone: 'utc' }).setLocale('en-US')
+  return format !== null && at.isValid ? at.toFormat(format) : day
+}
+
 /** The latest moment a dose can have been given: a date alone may mean its last minute, so the interval is never overstated. */
 function latestInstant(exposure: GadoliniumExposure, zone: string): DateTime | null {
   const start = DateTime.fromISO(exposure.givenAt, { zone })
@@ -92,7 +99,7 @@ function agoWords({ givenAt }: GadoliniumExposure, hours: number, { planned }: S
   const count = hours === 1 ? '1 hour' : `${hours} hours`
   const until = planned ? `${count} before the planned exam` : `${count} ago`
   if (givenAt.includes('T')) return until
-  return hours === 0 ? `on ${givenAt}, the hour not known` : `on ${givenAt}, at least ${until}`
+  return hours === 0 ? `on ${dayWords(givenAt)}, the hour not known` : `on ${dayWords(givenAt)}, at least ${until}`
 }
 
 function findEarlierDoses(context: SafetyContext): SafetyFinding[] {
@@ -107,7 +114,8 @@ function findEarlierDoses(context: SafetyContext): SafetyFinding[] {
   const amount = known.length === 0 ? (exposures.length === 1 ? 'amount not recorded' : 'amounts not recorded') : known.length === exposures.length
     ? `${total.toFixed(1)} mmol${exposures.length === 1 ? '' : ' in all'}`
     : `${total.toFixed(1)} mmol in the ${known.length} with an amount`
-  const span = dates[0] === dates.at(-1) ? `on ${dates[0]}` : `from ${dates[0]} to ${dates.at(-1)}`
+  const [first, last] = [dates[0] ?? '', dates.at(-1) ?? '']
+  const span = first === last ? `${first.length < 10 ? 'in' : 'on'} ${dayWords(first)}` : `from ${dayWords(first)} to ${dayWords(last)}`
   const linear = exposures.filter(exposure => agents.find(agent => agent.id === exposure.agent)?.structure === 'linear')
   const findings = [finding({
     id: 'exposure-earlier-doses', topic: 'exposure', severity: 'info',

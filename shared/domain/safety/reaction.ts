@@ -1,6 +1,7 @@
 import type { SafetyContext } from './context'
 import type { SafetyFinding } from './types'
 import type { AgentId } from '../contrast/types'
+import { unsuited } from '../contrast/rank'
 import { agentName, mayUseContrast } from './context'
 import { finding } from './finding'
 import { safetySources } from './sources'
@@ -26,6 +27,19 @@ function namedAgent({ screening }: SafetyContext): AgentId[] {
   return screening.reactionAgent === null || screening.reactionAgent === 'unknown' ? [] : [screening.reactionAgent]
 }
 
+/** Whether the department stocks another agent that suits this exam. */
+function canSwitch({ agents, outcome, policy }: SafetyContext, named: readonly AgentId[]): boolean {
+  return agents.some(agent => !named.includes(agent.id) && policy.stockedAgents.value.includes(agent.id) && outcome !== null && unsuited(agent, outcome) === null)
+}
+
+/** What to give instead of the agent named; a liver exam may have no other, and then goes without a liver agent. */
+function otherAgent(context: SafetyContext, named: readonly AgentId[]): string {
+  if (named.length === 0 || canSwitch(context, named)) return 'Another agent'
+  return context.outcome === 'iv-hepatobiliary'
+    ? 'No other liver agent is stocked, so a protocol without a liver agent on the radiologist\'s word'
+    : 'No other stocked agent suits this exam, so a radiologist chooses another way'
+}
+
 /** "Earlier reaction to gadobutrol: mild, allergic-like"; what is not known says how it is taken. */
 function described({ screening, agents }: SafetyContext): string {
   const severity = screening.reactionSeverity === null || screening.reactionSeverity === 'unknown'
@@ -41,7 +55,7 @@ function allergicLike(context: SafetyContext): SafetyFinding {
   const severity = context.screening.reactionSeverity
   const named = namedAgent(context)
   const what = described(context)
-  const change = named.length > 0 ? 'Another agent' : 'Find out which agent it was, so that another can be taken (a reaction to iodinated contrast does not count)'
+  const change = named.length > 0 ? otherAgent(context, named) : 'Find out which agent it was, so that another can be taken (a reaction to iodinated contrast does not count)'
   const { oral, accelerated } = policy.premedicationLeadHours.value
   const lead = `premedication from ${oral} hours before (${accelerated} on the accelerated schedule)`
   const watch = `${policy.observationMinutes.value} minutes of observation`
@@ -50,7 +64,7 @@ function allergicLike(context: SafetyContext): SafetyFinding {
   if (severity === 'severe') {
     return finding({
       ...common, id: 'reaction-allergic-severe', severity: 'hold',
-      text: `${what}. Leave contrast out or use another test unless it is essential. If it is: another agent, ${lead}, a physician in the room. `
+      text: `${what}. Leave contrast out or use another test unless it is essential. If it is: ${otherAgent(context, named).replace(/^\w/, first => first.toLowerCase())}, ${lead}, a physician in the room. `
         + 'Labels bar an agent after a severe reaction to it. An allergy work-up helps.',
       plain: 'You had a strong reaction to contrast before. A doctor decides if contrast is needed at all.',
       addsNeeds: ['radiologist-word', 'premedication', 'radiologist-present', 'observation', ...agentOpen],
@@ -60,8 +74,10 @@ function allergicLike(context: SafetyContext): SafetyFinding {
   if (severity === 'mild' && named.length > 0) {
     return finding({
       ...common, id: 'reaction-allergic-mild', severity: 'caution',
-      text: `${what}. Another agent, then ${watch}. Many departments add no premedication after a mild reaction; the radiologist decides.`,
-      plain: 'You had a mild reaction to contrast before. We use another type and watch you for longer.',
+      text: `${what}. ${otherAgent(context, named)}, then ${watch}. Many departments add no premedication after a mild reaction; the radiologist decides.`,
+      plain: canSwitch(context, named)
+        ? 'You had a mild reaction to contrast before. We use another type and watch you for longer.'
+        : 'You had a mild reaction to contrast before. A doctor decides what we use now.',
       addsNeeds: ['radiologist-word', 'observation'],
     })
   }

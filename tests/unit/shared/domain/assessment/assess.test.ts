@@ -219,6 +219,44 @@ describe('the words of one sheet', () => {
     expect(texts(liver)).not.toMatch(/No stocked agent/)
   })
 
+  it('offer a protocol without a liver agent where no other liver agent is stocked', () => {
+    const screening = { ...quietScreening, earlierReaction: 'yes' as const, reactionAgent: 'gadoxetate' as const, reactionKind: 'allergic-like' as const, reactionSeverity: 'moderate' as const }
+    const liver = { ...marta, questionId: 'liver-lesion-characterize', answers: { fnhAdenoma: 'yes' }, screening }
+    expect(texts(liver)).toMatch(/No other liver agent is stocked, so a protocol without a liver agent on the radiologist's word/)
+    expect(texts(liver)).toMatch(/No stocked agent fits[^\n]*A protocol without a liver agent may answer the question/)
+    expect(texts(liver)).not.toMatch(/Another agent/)
+    const both = { ...rules, policy: { ...rules.policy, stockedAgents: { ...rules.policy.stockedAgents, value: ['gadoxetate' as const, 'gadobenate' as const] } } }
+    const reaction = assess(liver, both).findings.find(found => found.id === 'reaction-allergic-moderate')
+    expect(reaction?.text).toMatch(/Another agent/)
+  })
+
+  it('say of group I that liver disease is not known where it is not', () => {
+    const reasons = (liverDisease: 'yes' | 'unknown') => assess({ ...marta, screening: { ...quietScreening, liverDisease } }, rules).agents?.ranked.find(one => one.agent === 'gadodiamide')?.reasons.join()
+    expect(reasons('unknown')).toMatch(/whether there is severe liver disease is not known/)
+    expect(reasons('yes')).toMatch(/not with severe liver disease/)
+  })
+
+  it('name the course of premedication that still fits', () => {
+    const screening = { ...quietScreening, earlierReaction: 'yes' as const, reactionAgent: 'gadobutrol' as const, reactionKind: 'allergic-like' as const, reactionSeverity: 'moderate' as const }
+    const needIn = (hours: number | null, setting: 'outpatient' | 'inpatient' = 'outpatient') => {
+      const plannedAt = hours === null ? null : new Date(Date.parse(marta.now) + hours * 3_600_000).toISOString()
+      return assess({ ...marta, plannedAt, setting, screening }, rules).needs.find(need => need.kind === 'premedication')
+    }
+    expect(needIn(48)).toMatchObject({ text: 'Premedication prescribed, oral course', dueText: 'first dose 13 hours before the exam' })
+    expect(needIn(null)).toMatchObject({ text: 'Premedication prescribed, oral course' })
+    expect(needIn(8)?.text).toMatch(/oral course \(13 hours\) no longer fits if it has not begun, so the accelerated one \(5 hours\) or a radiologist's word is needed/)
+    expect(needIn(8)?.dueText).toBe('first dose 5 hours before the exam')
+    expect(needIn(8, 'inpatient')?.text).toBe('Premedication prescribed, accelerated course')
+    expect(needIn(3)).toMatchObject({ text: expect.stringMatching(/no course that begins now is done in time.*radiologist's word/), dueText: 'before contrast' })
+  })
+
+  it('tell a patient on dialysis one thing about the session, and no waiting for one where the exam cannot wait', () => {
+    const screening = { ...quietScreening, dialysis: 'hemodialysis' as const }
+    const lines = (priority: 'routine' | 'stat') => assess({ ...marta, priority, screening }, rules).plain.before.filter(line => /dialysis/.test(line))
+    expect(lines('routine')).toEqual(['You have dialysis, so a doctor looks at contrast first. Keep your dialysis plan. We book the scan shortly before a session.'])
+    expect(lines('stat')).toEqual(['You have dialysis, so a doctor looks at contrast first. Keep your dialysis plan. Your scan is urgent and does not wait for a session.'])
+  })
+
   it('tell the patient each thing once', () => {
     const woman = { ...marta, patient: { ...marta.patient, birthDate: '1996-05-05' } }
     const pregnant = assess({ ...woman, screening: { ...quietScreening, pregnancy: 'yes' } }, rules).plain

@@ -35,6 +35,16 @@ describe('Unless', () => {
     expect(low.find(clause => clause.flips === 'egfr')?.text).toMatch(/^eGFR recovers to 30 or more: then contrast no longer waits/)
   })
 
+  it('speaks of no radiologist\'s word where contrast is left out either way', () => {
+    const fibrosis = { ...quietScreening, nephrogenicSystemicFibrosis: 'yes' as const }
+    const without = unless({ ...marta, screening: fibrosis, answers: { tumorInfection: 'no' } })
+    const barred = unless({ ...marta, screening: fibrosis })
+    for (const clause of [...without, ...barred]) {
+      if (clause.leadsTo === null) expect(clause.text).not.toMatch(/waits for a radiologist/)
+    }
+    expect(barred.map(clause => clause.flips)).toContain('nephrogenicSystemicFibrosis')
+  })
+
   it('asks about pregnancy only where it may be', () => {
     const young = { ...marta, patient: { ...marta.patient, birthDate: '1992-05-20' }, screening: { ...quietScreening, pregnancy: 'no' as const } }
     expect(unless(young).find(clause => clause.flips === 'pregnancy')).toMatchObject({ leadsTo: 'discuss' })

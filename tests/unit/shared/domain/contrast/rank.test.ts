@@ -37,6 +37,10 @@ describe('the agents for an exam', () => {
     expect(row('gadoxetate')).toMatchObject({ eligible: false, reasons: ['Kept for liver exams'] })
   })
 
+  it('keep the dose of one left out, since a radiologist may choose it with a reason', () => {
+    expect(row('gadobutrol', { barred: [{ agent: 'gadobutrol', reason: 'An earlier reaction to it' }] })).toMatchObject({ eligible: false, dose: { volumeDisplay: '7.0' } })
+  })
+
   it('leave none where all are barred', () => {
     const barred = starterAgents.map(({ id }) => ({ agent: id, reason: 'Earlier severe reaction to it' }))
     expect(rank({ barred }).best).toBeNull()

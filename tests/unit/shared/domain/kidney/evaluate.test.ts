@@ -232,6 +232,22 @@ describe('reasons for doubt', () => {
     expect(cautions({ screening: { acuteIllness: 'unknown', pregnancy: 'possible', liverDisease: 'yes' } })).toEqual(['acute-illness', 'pregnancy', 'liver-disease'])
   })
 
+  it('speak of no change or pregnancy where no number is given for them to mislead', () => {
+    const answers = { acuteIllness: 'yes', pregnancy: 'yes' } as const
+    expect(cautions({ screening: { ...answers, dialysis: 'hemodialysis' } })).toEqual([])
+    expect(cautions({ screening: answers, readings: [] })).not.toContain('pregnancy')
+    expect(cautions({ screening: answers })).toContain('pregnancy')
+  })
+
+  it('say that a creatinine below the measuring range of an adult suggests little muscle, and offer cystatin C', () => {
+    const low = reading({ value: 0.3, comparator: '<' })
+    expect(evaluate({ readings: [low] }).cautions.find(({ id }) => id === 'low-muscle-mass')?.text).toMatch(/little muscle.*cystatin C/)
+    expect(cautions({ readings: [low], patient: { sex: 'unknown' } })).toContain('low-muscle-mass')
+    expect(cautions({ readings: [low, reading({ analyte: 'cystatin-c', unit: 'mg/L', value: 1 })] })).not.toContain('low-muscle-mass')
+    expect(cautions({ readings: [low], patient: child })).not.toContain('low-muscle-mass')
+    expect(cautions({ readings: [reading({ value: 0.3 })] })).not.toContain('low-muscle-mass')
+  })
+
   it('say that injury cannot be judged where it matters', () => {
     expect(cautions({ setting: 'inpatient' })).toEqual(['injury-not-judged'])
     expect(cautions()).toEqual([])

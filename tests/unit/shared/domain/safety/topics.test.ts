@@ -159,16 +159,18 @@ describe('safety findings', () => {
   it('count a dose once that both the department and the hospital record hold', () => {
     const twice = [dose('2025-03-04T16:00:00Z'), { ...dose('2025-03-04'), id: 'l1', source: 'ledger' as const }]
     const text = (exposures: typeof twice) => findSafety(situation({ exposures })).find(found => found.id === 'exposure-earlier-doses')?.text
-    expect(text(twice)).toMatch(/^1 earlier gadolinium dose on 2025-03-04, 7\.4 mmol\./)
-    expect(text([...twice, dose('2025-09-01')])).toMatch(/^2 earlier gadolinium doses from 2025-03-04 to 2025-09-01, 14\.8 mmol/)
+    expect(text(twice)).toMatch(/^1 earlier gadolinium dose on Mar 4, 2025, 7\.4 mmol\./)
+    expect(text([dose('2022-10')])).toMatch(/^1 earlier gadolinium dose in Oct 2022,/)
+    expect(text([dose('2022')])).toMatch(/^1 earlier gadolinium dose in 2022,/)
+    expect(text([...twice, dose('2025-09-01')])).toMatch(/^2 earlier gadolinium doses from Mar 4, 2025 to Sep 1, 2025, 14\.8 mmol/)
   })
 
   it('say when the last dose was given, and claim no hour of a dose known by its day', () => {
     const text = (givenAt: string) => findSafety(situation({ exposures: [dose(givenAt)], kidney: { gateEgfr: 20 } })).find(found => found.id.startsWith('exposure-interval'))?.text
     expect(text('2026-12-01T05:00:00Z')).toMatch(/^The last gadolinium dose was given 10 hours ago\. With an eGFR below 30, 168 hours/)
     // The day ended at 06:00 UTC in the department's zone, 33 hours before.
-    expect(text('2026-11-29')).toMatch(/was given on 2026-11-29, at least 33 hours ago\./)
-    expect(text('2026-12-01')).toMatch(/was given on 2026-12-01, the hour not known\./)
+    expect(text('2026-11-29')).toMatch(/was given on Nov 29, 2026, at least 33 hours ago\./)
+    expect(text('2026-12-01')).toMatch(/was given on Dec 1, 2026, the hour not known\./)
   })
 
   it('claim no eGFR below the hold where only the lowest of several is', () => {
