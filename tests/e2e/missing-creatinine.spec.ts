@@ -58,6 +58,6 @@ test('a creatinine of eighteen months ago is not taken for a current one', async
   const radiologist = await desk.signedIn('radiologist')
   await go(radiologist, `/review?open=${sent.reference}`)
   const open = radiologist.getByRole('article', { name: sent.reference ?? '' })
-  await expect(open.getByText(/Too old for the exam: policy accepts 42 days/)).toBeVisible()
+  await expect(open.getByText('The newest creatinine is too old to rely on')).toBeVisible()
   await expect(open.getByText(need)).toBeVisible()
 })
