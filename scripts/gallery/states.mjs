@@ -26,7 +26,7 @@ const more = (name, item) => async (page, cast) => {
   await page.getByRole('dialog').waitFor()
 }
 const continueTo = async (page, _cast, width) => {
-  await page.getByText('Because', { exact: true }).first().waitFor({ state: 'attached' })
+  await page.getByRole('heading', { name: 'Safety questions' }).waitFor()
   await page.getByRole('button', { name: width === 'wide' ? /^Continue to/ : 'Continue', exact: width !== 'wide' }).click()
 }
 
@@ -86,7 +86,7 @@ export const states = [
   } },
   { name: 'new request, question, list open', as: 'clinician', at: step('question', 'empty'), then: async (page) => {
     await page.getByLabel('Clinical question').fill('seizure')
-    await page.getByRole('option').first().waitFor()
+    await page.getByRole('listbox').getByRole('option').first().waitFor()
   } },
   { name: 'new request, contrast', as: 'clinician', at: step('contrast', 'seizure') },
   { name: 'new request, contrast, another wish', as: 'clinician', at: step('contrast', 'seizure'), then: (page) => page.getByLabel('No, something else').check() },
