@@ -36,8 +36,9 @@ const mail = (pattern, nth = 0) => ({ mails }) => {
   if (!found) throw new Error(`no e-mail like ${pattern}; there are: ${mails.map(({ subject }) => subject).join(' | ')}`)
   return found.html
 }
+/** The link of the latest letter to one address. */
 const letterLink = ({ mails }, address) => {
-  const found = mails.find(({ to, html }) => to.some((one) => one.address === address) && html.includes('/explanation/'))
+  const found = mails.findLast(({ to, html }) => to.some((one) => one.address === address) && html.includes('/explanation/'))
   if (!found) throw new Error(`no letter to ${address}`)
   return /href="([^"]*\/explanation\/[^"]+)"/.exec(found.html)[1].replaceAll('&amp;', '&')
 }
@@ -160,7 +161,8 @@ export const states = [
   { name: 'e-mail, second letter', at: ({ mails }) => mails.filter(({ to }) => to.some(({ address }) => address.startsWith('elin'))).at(-1)?.html ?? '', html: true },
   { name: 'patient, date of birth', at: (cast) => letterLink(cast, 'ingrid.moller@example.org'), then: (page) => page.getByLabel('Month').waitFor() },
   { name: 'patient, wrong date of birth', at: (cast) => letterLink(cast, 'ingrid.moller@example.org'), then: birthDate('January', '2', '1903') },
-  { name: 'patient, explanation', at: (cast) => letterLink(cast, 'elin.strand@example.org'), then: birthDate('October', '5', '1997') },
+  { name: 'patient, before the exam', at: (cast) => letterLink(cast, 'samuel.adjei@example.org'), then: birthDate('November', '5', '1979') },
+  { name: 'patient, after the exam', at: (cast) => letterLink(cast, 'elin.strand@example.org'), then: birthDate('October', '5', '1997') },
   { name: 'patient, ended link', at: '/explanation/not-a-link-of-ours', then: birthDate('January', '2', '1990') },
   { name: 'patient, closed page', at: '/explanation/current' },
   { name: 'invitation, ended', at: '/invitation/not-a-link-of-ours' },
