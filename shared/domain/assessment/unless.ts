@@ -137,9 +137,13 @@ function screeningFlips({ screening, patient, now }: AssessmentInputs, { policy 
   return flips
 }
 
+/** Answers that move neither the kidney estimate nor the age its creatinine may have. */
+const besideKidneys: readonly (keyof ScreeningAnswers)[] = ['pregnancy', 'earlierReaction', 'nephrogenicSystemicFibrosis']
+
 function screeningChanges(inputs: AssessmentInputs, rules: AssessmentRules, base: Judgement): Change[] {
   return screeningFlips(inputs, rules, base).map(({ field, weight, to, fact }) => ({
-    fact, flips: field, weight, result: judge({ ...inputs, screening: { ...inputs.screening, ...to } }, rules),
+    fact, flips: field, weight,
+    result: judge({ ...inputs, screening: { ...inputs.screening, ...to } }, rules, besideKidneys.includes(field) ? { kidney: base.kidney } : {}),
   }))
 }
 

@@ -32,13 +32,18 @@ function birthDays(birthDate: string): { earliest: Day, latest: Day } | null {
   const year = Number(match[1])
   const month = match[2] === undefined ? null : Number(match[2])
   const day = match[3] === undefined ? null : Number(match[3])
-  const first = DateTime.fromObject({ year, month: month ?? 1, day: day ?? 1 }, { zone: 'utc' })
-  if (!first.isValid) return null
-  const last = day !== null ? first : first.endOf(month === null ? 'year' : 'month')
+  const [first, last] = [month ?? 1, month ?? 12]
+  if (first < 1 || first > 12 || (day !== null && (day < 1 || day > daysInMonth(year, first)))) return null
   return {
-    earliest: { year: first.year, month: first.month, day: first.day },
-    latest: { year: last.year, month: last.month, day: last.day },
+    earliest: { year, month: first, day: day ?? 1 },
+    latest: { year, month: last, day: day ?? daysInMonth(year, last) },
   }
+}
+
+/** Days of a month of the Gregorian calendar, which ISO 8601 uses. */
+function daysInMonth(year: number, month: number): number {
+  if (month === 2) return year % 4 === 0 && (year % 100 !== 0 || year % 400 === 0) ? 29 : 28
+  return [4, 6, 9, 11].includes(month) ? 30 : 31
 }
 
 /**

@@ -3,6 +3,7 @@ import type { SafetyContext } from './context'
 import type { GadoliniumExposure, SafetyFinding } from './types'
 import { countsAsBelow } from '../kidney/evaluate'
 import { isAcute } from '../kidney/injury'
+import { parseInstant } from '../kidney/instant'
 import { mayBeIntravenous, mayUseContrast } from './context'
 import { finding } from './finding'
 import { safetySources } from './sources'
@@ -18,20 +19,24 @@ export function findExposure(context: SafetyContext): SafetyFinding[] {
  * The department's own comes first, since it knows the amount.
  */
 export function distinctDoses(exposures: readonly GadoliniumExposure[], zone: string): GadoliniumExposure[] {
+  return distinctWithDays(exposures, zone).map(({ dose }) => dose)
+}
+
+function distinctWithDays(exposures: readonly GadoliniumExposure[], zone: string): { dose: GadoliniumExposure, day: string }[] {
   const trust = ['ledger', 'record', 'typed'] as const
-  const sorted = [...exposures].sort((a, b) => trust.indexOf(a.source) - trust.indexOf(b.source))
-  const kept: GadoliniumExposure[] = []
-  for (const dose of sorted) {
-    const twin = kept.find(other => other.source !== dose.source && dayOf(other, zone) === dayOf(dose, zone)
-      && (other.agent === dose.agent || other.agent === null || dose.agent === null))
-    if (!twin) kept.push(dose)
+  const sorted = [...exposures].sort((a, b) => trust.indexOf(a.source) - trust.indexOf(b.source)).map(dose => ({ dose, day: dayOf(dose, zone) }))
+  const kept: typeof sorted = []
+  for (const { dose, day } of sorted) {
+    const twin = kept.find(other => other.dose.source !== dose.source && other.day === day
+      && (other.dose.agent === dose.agent || other.dose.agent === null || dose.agent === null))
+    if (!twin) kept.push({ dose, day })
   }
   return kept
 }
 
 function dayOf({ givenAt }: GadoliniumExposure, zone: string): string {
-  const at = DateTime.fromISO(givenAt, { zone })
-  return givenAt.includes('T') && at.isValid ? at.toFormat('yyyy-MM-dd') : givenAt
+  if (!givenAt.includes('T')) return givenAt
+  return DateTime.fromISO(givenAt, { zone }).toISODate() ?? givenAt
 }
 
 /** "Oct 23, 2022" of a day, "Oct 2022" of a month; a year, or what is no date, as it is. */
@@ -43,6 +48,9 @@ function dayWords(day: string): string {
 
 /** The latest moment a dose can have been given: a date alone may mean its last minute, so the interval is never overstated. */
 function latestInstant(exposure: GadoliniumExposure, zone: string): DateTime | null {
+  const instant = parseInstant(exposure.givenAt)
+  // Most are full instants, and to read those in the zone of the department costs more than all the rest.
+  if (instant !== null) return DateTime.fromMillis(instant, { zone: 'utc' })
   const start = DateTime.fromISO(exposure.givenAt, { zone })
   if (!start.isValid) return null
   return exposure.givenAt.includes('T') ? start : start.endOf('day')
@@ -52,13 +60,13 @@ function findInterval(context: SafetyContext): SafetyFinding[] {
   const { policy, kidney } = context
   if (!mayBeIntravenous(context)) return []
   const zone = policy.department.timeZone
-  const at = DateTime.fromISO(context.at)
+  const at = DateTime.fromISO(context.at, { zone: 'utc' })
   const last = context.exposures
     // A month or year alone says nothing about hours.
     .filter(exposure => /^\d{4}-\d{2}-\d{2}/.test(exposure.givenAt))
     .flatMap((exposure) => {
       const instant = latestInstant(exposure, zone)
-      return instant !== null && instant.startOf('day') <= at ? [{ exposure, instant }] : []
+      return instant !== null && (instant <= at || instant.setZone(zone).startOf('day') <= at) ? [{ exposure, instant }] : []
     })
     .reduce<{ exposure: GadoliniumExposure, instant: DateTime } | null>((newest, one) => newest === null || one.instant > newest.instant ? one : newest, null)
   if (last === null) return []
@@ -105,11 +113,12 @@ function agoWords({ givenAt }: GadoliniumExposure, hours: number, { planned }: S
 function findEarlierDoses(context: SafetyContext): SafetyFinding[] {
   const { agents } = context
   const zone = context.policy.department.timeZone
-  const exposures = distinctDoses(context.exposures, zone)
+  const distinct = distinctWithDays(context.exposures, zone)
+  const exposures = distinct.map(({ dose }) => dose)
   if (exposures.length === 0) return []
   const known = exposures.filter(exposure => exposure.amountMmol !== null)
   const total = known.reduce((sum, exposure) => sum + (exposure.amountMmol ?? 0), 0)
-  const dates = exposures.map(exposure => dayOf(exposure, zone)).sort()
+  const dates = distinct.map(({ day }) => day).sort()
   const doses = exposures.length === 1 ? '1 earlier gadolinium dose' : `${exposures.length} earlier gadolinium doses`
   const amount = known.length === 0 ? (exposures.length === 1 ? 'amount not recorded' : 'amounts not recorded') : known.length === exposures.length
     ? `${total.toFixed(1)} mmol${exposures.length === 1 ? '' : ' in all'}`
