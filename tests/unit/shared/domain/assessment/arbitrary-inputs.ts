@@ -7,6 +7,7 @@ import { observationStatuses } from '#shared/domain/kidney/types'
 import type { LabReading } from '#shared/domain/kidney/types'
 import { priorities } from '#shared/domain/request/priority'
 import type { GadoliniumExposure, ScreeningAnswers } from '#shared/domain/safety/types'
+import { creatinine, marta } from './request-inputs'
 
 const instant = fc.date({ min: new Date('2024-01-01'), max: new Date('2028-01-01'), noInvalidDate: true }).map(date => date.toISOString())
 const yesNoUnknown = fc.constantFrom('yes', 'no', 'unknown', null)
@@ -98,3 +99,13 @@ export const arbitraryInputs: fc.Arbitrary<AssessmentInputs> = fc.record({
   screening,
   exposures: fc.array(exposure, { maxLength: 3 }),
 }).map(({ asked: { questionId, answers }, ...rest }) => ({ ...rest, questionId, answers }))
+
+/** Any person and answers beside a question that asks for contrast and a recent creatinine, where most rules have something to say. */
+export const arbitraryContrastInputs: fc.Arbitrary<AssessmentInputs> = fc.record({
+  inputs: arbitraryInputs,
+  daysAgo: fc.integer({ min: 0, max: 60 }),
+  mgPerDl: fc.double({ min: 0.4, max: 4, noNaN: true }),
+}).map(({ inputs: { screening, patient, priority, setting, exposures, record, plannedAt }, daysAgo, mgPerDl }) => {
+  const readings = [creatinine(mgPerDl, new Date(Date.parse(marta.now) - daysAgo * 86_400_000).toISOString())]
+  return { ...marta, screening, patient, priority, setting, exposures, record, plannedAt, readings }
+})

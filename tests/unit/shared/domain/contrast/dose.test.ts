@@ -1,5 +1,6 @@
 import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
+import { starterAgents } from '#shared/domain/contrast/agents'
 import { computeDose, displayVolume } from '#shared/domain/contrast/dose'
 
 const gadoxetate = { doseMmolPerKg: 0.025, concentrationMmolPerMl: 0.25, youngestLabelledAgeYears: null }
@@ -33,6 +34,23 @@ describe('a dose by weight', () => {
       const result = computeDose({ agent: gadopiclenol, weightKg, ageYears: 40 })
       if (result.status !== 'ok') throw new Error(result.status)
       expect(result.dose.volumeMl * gadopiclenol.concentrationMmolPerMl).toBeCloseTo(weightKg * 0.05, 9)
+    }))
+  })
+})
+
+describe('the dose of any agent', () => {
+  it('never falls with weight, neither worked out nor as shown', () => {
+    fc.assert(fc.property(fc.constantFrom(...starterAgents), fc.double({ min: 0.5, max: 300, noNaN: true }), fc.double({ min: 0, max: 100, noNaN: true }), (agent, weightKg, more) => {
+      const of = (kg: number) => {
+        const result = computeDose({ agent, weightKg: kg, ageYears: 40 })
+        if (result.status !== 'ok') throw new Error(result.status)
+        return result.dose
+      }
+      const lighter = of(weightKg)
+      const heavier = of(weightKg + more)
+      expect(heavier.amountMmol).toBeGreaterThanOrEqual(lighter.amountMmol)
+      expect(heavier.volumeMl).toBeGreaterThanOrEqual(lighter.volumeMl)
+      expect(Number(heavier.volumeDisplay)).toBeGreaterThanOrEqual(Number(lighter.volumeDisplay))
     }))
   })
 })

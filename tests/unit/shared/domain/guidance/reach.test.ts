@@ -1,4 +1,6 @@
 import { decide } from '#shared/domain/guidance/decide'
+import { decidedValues } from '#shared/domain/guidance/deciders'
+import { starterQuestions } from '#shared/domain/guidance/questions/index'
 import { reachableOutcomes } from '#shared/domain/guidance/reach'
 import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
@@ -16,6 +18,17 @@ describe('what answers can still lead to', () => {
   it('treats a fact declared unknown like one not given', () => {
     const question = starter('first-seizure-adult')
     expect(reachableOutcomes(question, { tumorInfection: 'unknown' })).toEqual(reachableOutcomes(question, {}))
+  })
+
+  it('is, for a fact that is not known, all that its values together can lead to', () => {
+    const cases = fc.oneof(arbitraryQuestion, fc.constantFrom(...starterQuestions))
+      .chain(question => arbitraryAnswers(question).map(answers => ({ question, answers })))
+    fc.assert(fc.property(cases, fc.nat(), ({ question, answers }, pick) => {
+      const decider = question.deciders[pick % Math.max(1, question.deciders.length)]
+      if (decider === undefined) return
+      const each = decidedValues(decider).flatMap(value => reachableOutcomes(question, { ...answers, [decider.id]: value }))
+      expect(new Set(reachableOutcomes(question, { ...answers, [decider.id]: 'unknown' }))).toEqual(new Set(each))
+    }), { numRuns: 500 })
   })
 
   it('is one outcome wherever the question is answered', () => {

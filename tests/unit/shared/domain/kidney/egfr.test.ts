@@ -41,6 +41,18 @@ describe('every equation', () => {
     }))
   })
 
+  it('for adults gives less at every later age', () => {
+    fc.assert(fc.property(sex, adultAge, fc.integer({ min: 1, max: 10 }), creatinine, fc.double({ min: 0.2, max: 8, noNaN: true }), (who, age, years, mgPerDl, cystatinCMgPerL) => {
+      const at = (ageYears: number) => [
+        value(ckdEpi2021Creatinine({ ageYears, sex: who, creatinine: { value: mgPerDl, unit: 'mg/dL' } })),
+        value(ckdEpi2021CreatinineCystatinC({ ageYears, sex: who, creatinineMgPerDl: mgPerDl, cystatinCMgPerL })),
+        value(ckdEpi2012CystatinC({ ageYears, sex: who, cystatinCMgPerL })),
+      ]
+      const younger = at(age)
+      at(age + years).forEach((older, index) => expect(older).toBeLessThan(younger[index] ?? 0))
+    }))
+  })
+
   it('gives the same for mg/dL and µmol/L', () => {
     fc.assert(fc.property(sex, adultAge, creatinine, (who, ageYears, mgPerDl) => {
       const mass = value(ckdEpi2021Creatinine({ ageYears, sex: who, creatinine: { value: mgPerDl, unit: 'mg/dL' } }))
