@@ -73,6 +73,9 @@ export function createProcesses({ cwd, logs, onChange = () => {} }) {
   /**
    * Starts a program that keeps running, and waits until `url` answers.
    *
+   * @param {string} name
+   * @param {string} command
+   * @param {string[]} args
    * @param {{ url: string, timeout?: number, env?: NodeJS.ProcessEnv, show?: boolean, onCrash?: (message: string) => void }} options
    */
   async function serve(name, command, args, { url, timeout = 60_000, onCrash = () => {}, ...options }) {

@@ -1,4 +1,4 @@
-import { z } from 'zod'
+import type { z } from 'zod'
 import { BadRequest } from './errors'
 
 /** A page's end as an opaque mark: the sort values of its last row. */
