@@ -3,10 +3,18 @@ import { breakRecord, resetRecord } from '../support/e2e/record'
 import {
   answerSafety, beginRequest, checkedWithPatient, chooseQuestion, confirmPatient, findPatient, goOn, heading, saved, send, sheet, writeHistory,
 } from '../support/e2e/request-form'
-import { alerts, expect, go, hydrated, test } from '../support/e2e/test'
+import { staff } from '../support/e2e/staff'
+import { alerts, expect, go, hydrated, people, test } from '../support/e2e/test'
 import { dayAhead } from '../support/e2e/times'
 
 const question = 'First suspected demyelinating attack: is this multiple sclerosis?'
+
+// After failures the server leaves the record alone for a while; the next test begins once it asks again.
+test.afterEach(async () => {
+  await resetRecord()
+  const { searchedIn } = await staff(people.clinician)
+  await expect.poll(() => searchedIn('40-2295'), { timeout: 90_000, intervals: [2_000] }).toBe('record')
+})
 
 test('with the hospital record down, the clinician types a value with its date and source, and nothing is lost', async ({ desk }) => {
   test.setTimeout(180_000)

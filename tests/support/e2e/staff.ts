@@ -46,6 +46,8 @@ export interface Asking {
 
 export interface Staff {
   visitor: Visitor
+  /** Where a search for a patient looks at this moment: in the hospital record, or among those known here while it is away. */
+  searchedIn: (recordNumber: string) => Promise<string>
   /** A draft with nothing answered yet. */
   begin: (recordNumber: string) => Promise<Written>
   /** A draft of one patient, answered to the end. */
@@ -115,6 +117,9 @@ export async function staff(email: string, at = origin()): Promise<Staff> {
 
   return {
     visitor,
+    async searchedIn(recordNumber) {
+      return (await must(z.object({ source: z.string() }), await visitor.send('POST', '/api/patient-searches', { recordNumber }), 'searching')).source
+    },
     begin,
     draft,
     view,
