@@ -50,6 +50,8 @@ export async function createCamera({ chromium, place, out }) {
       else await open(page, address, state.bare)
       await state.then?.(page, cast, width)
       await page.waitForLoadState('networkidle')
+      // Whatever was pressed has been answered.
+      await page.waitForFunction(() => document.querySelector('[aria-busy="true"]') === null)
       // A dialog belongs to the screen, not to the length of the page.
       const fullPage = await page.getByRole('dialog').count() === 0
       await page.screenshot({ path: join(out, fileName(state.name, width)), fullPage, animations: 'disabled' })
